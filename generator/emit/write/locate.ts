@@ -35,9 +35,15 @@ export async function locate(request: FolderRequest): Promise<Outcome<Place>> {
 
 /** A folder to read from or to recover: a link to it is followed, nothing is refused. */
 export async function locateForReading(directory: string, cwd: string, fs: FileSystem): Promise<Place> {
-  const absolute = resolve(cwd, directory);
-  const { existing, missing } = await realAncestor(absolute, fs);
-  return placeAt(join(existing, missing), directory, fs);
+  return placeAt(await followed(resolve(cwd, directory), fs), directory, fs);
+}
+
+/** Also a link to where a folder was until a run was interrupted; only its siblings are there now. */
+async function followed(path: string, fs: FileSystem): Promise<string> {
+  const { existing, missing } = await realAncestor(path, fs);
+  const real = join(existing, missing);
+  if (!(await statusOf(real, fs))?.isSymbolicLink()) return real;
+  return followed(resolve(dirname(real), await fs.readlink(real)), fs);
 }
 
 /** What stands in the folder itself; looked at again once an interrupted exchange is settled. */

@@ -5,6 +5,8 @@ import type { FileSystem } from './FileSystem.ts';
 import { isAbsence, isSystemError } from './machineOutcome.ts';
 
 const POLL_ms = 50;
+/** Far longer than a rival needs between its look at a dead owner's lock and its own lock. */
+const RIVAL_ms = 20;
 
 /** Locks of this very process: a lock with our own process number that is not here was left by a dead one. */
 const held = new Set<string>();
@@ -90,7 +92,7 @@ async function evict(path: string, owner: string, fs: FileSystem): Promise<void>
 
 /** Two may evict the same dead owner, the slower one taking the faster one's lock away; the last mark counts. */
 async function staysOurs(path: string, mark: string, fs: FileSystem): Promise<boolean> {
-  await pause(POLL_ms);
+  await pause(RIVAL_ms);
   return (await ownerOf(path, fs)) === mark;
 }
 

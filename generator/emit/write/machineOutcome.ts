@@ -30,6 +30,11 @@ const KNOWN: Readonly<Record<string, readonly [code: string, received: string, f
   EROFS: ['read-only', 'the disk is read-only', 'choose a folder on a disk that can be written to'],
   EBUSY: ['folder-in-use', 'a folder is a mount point or in use', 'choose a new folder inside it'],
   EXDEV: ['folder-in-use', 'a folder lies on another disk than its parent', 'choose a new folder inside it'],
+  EEXIST: [
+    'leftover',
+    'a leftover of an earlier run is in the way',
+    'delete the hidden counterslope siblings of the folder',
+  ],
   ENAMETOOLONG: ['name-too-long', 'the name is too long for this disk', 'choose a shorter name'],
 };
 
