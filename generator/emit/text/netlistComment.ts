@@ -41,12 +41,13 @@ const SPELLED_OUT: ReadonlyMap<string, string> = new Map([
 /**
  * A user's words as one complete comment line of a netlist, without the line end.
  *
- * Plain ASCII: composed first (U+2126 becomes the Greek omega), accents are folded, technical signs spelled out, everything else is written as its code
- * point, `\u{6e29}`. Three readers have traps behind the asterisk, hence the blank and the escaped backslash:
+ * Plain ASCII: accents are folded, technical signs spelled out, everything else is written as its code
+ * point, `\u{6e29}`. Readers have traps behind the asterisk, hence the blank and the escaped backslash:
  * `*#` and `*ng_script` are commands to ngspice, `*>` switches the comment off in gnucap, and gnucap
  * joins the next line to one that ends in a backslash.
  */
 export function netlistComment(text: string): string {
+  // Composed first: U+2126 becomes the Greek omega, a letter and its accent one sign.
   const signs = [...text.normalize('NFC')].map(asciiFor);
   return `* ${shortened(signs)}`.trimEnd();
 }

@@ -16,10 +16,10 @@ export interface KeptFile {
 /**
  * Moves from the old folder to the new one everything that is not ours to throw away.
  *
- * Moved, not copied: contents, times, rights, links and folders stay what they are, at any size. Afterwards the old folder
- * holds only files of ours exactly as we wrote them. Entries that keep their name go
- * first, so that no `.bak` is made under a name that one of them still needs; a second call goes on
- * where a first one stopped.
+ * Moved, not copied: contents, times, rights, links and folders stay what they are, at any size.
+ * Afterwards the old folder holds only files of ours exactly as we wrote them. Entries that keep their
+ * name go first, so that no `.bak` is made under a name that one of them still needs; a second call goes
+ * on where a first one stopped.
  */
 export async function carryOver({ folder, old, fs }: Place, rename: Rename): Promise<KeptFile[]> {
   const owned = await readOwnership(old, fs);

@@ -2,15 +2,26 @@ import { join } from 'node:path';
 import type { Problem } from '../../base/Problem.ts';
 import { exists, fingerprint, sha256 } from './entries.ts';
 import { folderProblem } from './FolderOutcome.ts';
+import { folderRefusal, whyNoFolder } from './locate.ts';
 import { MANIFEST, readOwnership } from './manifest.ts';
 import type { Place } from './Place.ts';
+
+/** Why a set must not take a folder's place: what the folder is or, unless forced, what is in it. */
+export async function refusalsOf(
+  place: Place,
+  files: ReadonlyMap<string, string>,
+  force: boolean,
+): Promise<readonly Problem[]> {
+  const reason = await whyNoFolder(place.folder, place.fs);
+  if (reason !== null) return [folderRefusal(place.shown, reason)];
+  return force ? [] : conflictsIn(place, files);
+}
 
 /**
  * Every file whose words a new set would take the place of: ours but edited by hand, or the user's own
  * under a name of the new set.
- * @param files the new set with its manifest; empty where only edits are looked for
  */
-export async function conflictsIn(place: Place, files: ReadonlyMap<string, string>): Promise<Problem[]> {
+async function conflictsIn(place: Place, files: ReadonlyMap<string, string>): Promise<Problem[]> {
   const { folder, fs } = place;
   const owned = await readOwnership(folder, fs);
   const problems: Problem[] = [];

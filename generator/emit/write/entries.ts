@@ -21,6 +21,11 @@ export async function exists(path: EntryPath, fs: FileSystem): Promise<boolean> 
   return (await statusOf(path, fs)) !== null;
 }
 
+/** A folder itself, not a link to one. */
+export async function isFolder(path: string, fs: FileSystem): Promise<boolean> {
+  return (await statusOf(path, fs))?.isDirectory() ?? false;
+}
+
 /** SHA-256 of a plain file; null for anything else, so that no link is followed and no pipe waited for. */
 export async function fingerprint(path: EntryPath, fs: FileSystem): Promise<string | null> {
   const status = await statusOf(path, fs);
@@ -36,9 +41,13 @@ export function entryIn(folder: string, name: string | Buffer): EntryPath {
   return typeof name === 'string' ? join(folder, name) : Buffer.concat([Buffer.from(folder + sep), name]);
 }
 
-/** Removes a folder of ours that holds files only; never descends. */
+/**
+ * Removes a folder of ours that holds files only; never descends.
+ *
+ * A link of its name, which in a shared parent anybody may have laid, goes itself; what it leads to stays.
+ */
 export async function removeFlatFolder(folder: string, fs: FileSystem): Promise<void> {
-  if (!(await exists(folder, fs))) return;
+  if (!(await isFolder(folder, fs))) return removeFile(folder, fs);
   for (const name of await entriesOf(folder, fs)) await fs.unlink(entryIn(folder, name));
   await fs.rmdir(folder);
 }

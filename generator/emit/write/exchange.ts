@@ -1,6 +1,14 @@
 import type { Problem } from '../../base/Problem.ts';
 import { carryOver, type KeptFile, type Rename } from './carryOver.ts';
-import { entriesOf, exists, removeFile, removeFlatFolder, statusOf, syncFolder } from './entries.ts';
+import {
+  entriesOf,
+  exists,
+  isFolder,
+  removeFile,
+  removeFlatFolder,
+  statusOf,
+  syncFolder,
+} from './entries.ts';
 import type { EntryPath } from './FileSystem.ts';
 import { folderProblem } from './FolderOutcome.ts';
 import { isSystemError } from './machineOutcome.ts';
@@ -53,17 +61,20 @@ export async function settle(place: Place): Promise<{ settlement: Settlement; no
   return { settlement: begun ? 'old set restored' : 'nothing to do', notes: [] };
 }
 
-/** A new set is finished only where the journal says that it is whole, it is, and the old one has made room. */
+/** A new set is finished only where the journal calls it whole, it is, and the old one has made room. */
 async function isUsable({ fs, folder, fresh, old, journal }: Place): Promise<boolean> {
-  if (!(await exists(journal, fs)) || !(await isWholeSet(fresh, fs))) return false;
+  if (!(await exists(journal, fs)) || !(await isFolder(fresh, fs))) return false;
+  if (!(await isWholeSet(fresh, fs))) return false;
   return (await exists(old, fs)) || !(await exists(folder, fs));
 }
 
 /**
- * While the old folder waits as a sibling, its name is free or the new set's; a folder that somebody else
- * made there stands in the way, but for an empty one (`mkdir -p` before each run), which goes.
+ * While the old folder waits as a sibling, its name is free or the new set's. A folder that somebody else
+ * made there stands in the way, and so does a link laid in place of the sibling; an empty folder
+ * (`mkdir -p` before each run) goes.
  */
-async function isForeign({ fs, folder }: Place, hasFresh: boolean): Promise<boolean> {
+async function isForeign({ fs, folder, old }: Place, hasFresh: boolean): Promise<boolean> {
+  if (!(await isFolder(old, fs))) return true;
   const status = await statusOf(folder, fs);
   if (status === null) return false;
   if (!status.isDirectory()) return true;
@@ -92,7 +103,7 @@ async function finish({ fs, discard, journal, parent }: Place): Promise<void> {
   await removeFile(journal, fs);
 }
 
-/** The new set stands; that the old one could not be deleted is no failure, and the next command tries again. */
+/** The new set stands; that the old one could not be deleted is no failure, and is tried again next time. */
 async function finishQuietly(place: Place): Promise<Problem[]> {
   try {
     await finish(place);

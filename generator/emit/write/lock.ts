@@ -90,7 +90,7 @@ async function evict(path: string, owner: string, fs: FileSystem): Promise<void>
   }
 }
 
-/** Two may evict the same dead owner, the slower one taking the faster one's lock away; the last mark counts. */
+/** Two may evict the same dead owner, the slower taking the faster one's lock away; the last mark counts. */
 async function staysOurs(path: string, mark: string, fs: FileSystem): Promise<boolean> {
   await pause(RIVAL_ms);
   return (await ownerOf(path, fs)) === mark;
@@ -114,7 +114,7 @@ async function markOf(pid: number, fs: FileSystem): Promise<string> {
   return `${pid}@${await birthOf(pid, fs)}`;
 }
 
-/** When a process began, in the kernel's ticks: numbers of processes come round again, in containers at once. */
+/** When a process began, in the kernel's ticks: process numbers come round again, in containers at once. */
 async function birthOf(pid: number, fs: FileSystem): Promise<string> {
   try {
     const line = (await fs.readFile(`/proc/${pid}/stat`)).toString('utf8');

@@ -39,7 +39,7 @@ export function readFileSet(request: RecoverRequest): Promise<FolderOutcome<Stor
   });
 }
 
-/** Another run may replace the set between two reads; then the manifest is another one, and reading begins anew. */
+/** Another run may replace the set between two reads; then its manifest differs, and reading begins anew. */
 async function readUnchanging(place: Place): Promise<FolderOutcome<StoredSet>> {
   for (let attempt = 1; ; attempt++) {
     const before = await readText(place, MANIFEST);

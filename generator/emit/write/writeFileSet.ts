@@ -1,15 +1,14 @@
 import { dirname } from 'node:path';
-import type { Problem } from '../../base/Problem.ts';
 import type { KeptFile } from './carryOver.ts';
-import { conflictsIn } from './conflicts.ts';
+import { refusalsOf } from './conflicts.ts';
 import { exchange } from './exchange.ts';
 import { done, type FolderOutcome, refused } from './FolderOutcome.ts';
 import { holdFolder, type Waiting, withoutExceptions } from './holdFolder.ts';
-import { type FolderRequest, folderRefusal, locate, whyNoFolder } from './locate.ts';
+import { type FolderRequest, locate } from './locate.ts';
 import { isSystemError } from './machineOutcome.ts';
 import { MANIFEST, manifestOf, readOwnership } from './manifest.ts';
 import type { Place } from './Place.ts';
-import { recoverFileSet, settled } from './recoverFileSet.ts';
+import { settled } from './recoverFileSet.ts';
 import { stage, unstage } from './stage.ts';
 
 export interface WriteRequest extends FolderRequest, Waiting {
@@ -53,21 +52,6 @@ export async function writeFileSet(request: WriteRequest): Promise<FolderOutcome
   });
 }
 
-/**
- * Says beforehand, without writing, what `writeFileSet` would refuse: a folder that must not be replaced, a file that was
- * edited by hand. For asking before long work is done for nothing; also recovers what an interrupted run left.
- */
-export function checkFolder(request: FolderRequest & Waiting & { readonly force: boolean }) {
-  return withoutExceptions(request.directory, async (): Promise<FolderOutcome<null>> => {
-    const located = await locate(request);
-    if (!located.ok) return refused(...located.problems);
-    const recovered = await recoverFileSet(request);
-    if (recovered.kind !== 'done') return recovered;
-    const problems = await refusalsOf(located.value, new Map([[MANIFEST, '']]), request.force);
-    return problems.length > 0 ? refused(...problems) : done(null, recovered.notes);
-  });
-}
-
 async function replace(
   place: Place,
   files: ReadonlyMap<string, string>,
@@ -84,16 +68,6 @@ async function replace(
     ...recovered.notes,
     ...notes,
   ]);
-}
-
-async function refusalsOf(
-  place: Place,
-  files: ReadonlyMap<string, string>,
-  force: boolean,
-): Promise<readonly Problem[]> {
-  const reason = await whyNoFolder(place.folder, place.fs);
-  if (reason !== null) return [folderRefusal(place.shown, reason)];
-  return force ? [] : conflictsIn(place, files);
 }
 
 async function stageAndExchange(

@@ -1,7 +1,7 @@
 import * as disk from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { expect, test } from 'vitest';
-import { checkFolder } from '../../../../generator/emit/write/writeFileSet.ts';
+import { checkFolder } from '../../../../generator/emit/write/checkFolder.ts';
 import { newWorkshop, picture, requestIn, write } from './workshop.ts';
 
 type Changes = Parameters<typeof write>[1];

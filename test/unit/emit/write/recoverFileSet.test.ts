@@ -102,3 +102,19 @@ test('a set that was never whole is thrown away', async () => {
   expect(await disk.readdir(cwd)).toEqual(['design']);
   expect(await textOf(cwd, 'ramp.cir')).toBe(someSet.get('ramp.cir'));
 });
+
+test.each(['fresh', 'old', 'discard'] as const)(
+  'a link laid in place of the %s sibling leads nowhere',
+  async (sibling) => {
+    const cwd = await newWorkshop();
+    await write(cwd);
+    await disk.mkdir(join(cwd, 'precious'));
+    await disk.writeFile(join(cwd, 'precious/kept.txt'), 'kept');
+    const place = placeAt(join(cwd, 'design'), 'design', realDisk);
+    await disk.symlink('precious', place[sibling]);
+    await disk.writeFile(place.journal, '{}');
+    await recover(cwd);
+    await write(cwd);
+    expect(await picture(join(cwd, 'precious'))).toEqual({ 'kept.txt': 'kept' });
+  },
+);
