@@ -1,0 +1,35 @@
+import type { Document, ErrorCode } from 'yaml';
+import type { Place, Problem } from '../../base/Problem.ts';
+import { problemAt } from '../entries/Entry.ts';
+import { displayed } from '../values/ValueFault.ts';
+
+const remedies: Readonly<Partial<Record<ErrorCode, string>>> = {
+  TAB_AS_INDENT: 'indent with spaces',
+  BAD_INDENT: 'indent the keys of a group alike, with spaces',
+  BLOCK_AS_IMPLICIT_KEY: 'put text that holds a colon in quotes',
+  BAD_SCALAR_START: 'put text that begins with this sign in quotes',
+  MISSING_CHAR: 'close the bracket, brace or quote; put a space behind a colon',
+  BAD_DQ_ESCAPE: 'double the backslash, or use single quotes',
+  BAD_ALIAS: 'put text that begins with * or & in quotes',
+  TAG_RESOLVE_FAILED: 'remove the tag: values need none; put text that begins with ! in quotes',
+};
+
+/** Everything the parser complains of; a tag that it does not know included, a second document by its own name. */
+export function yamlProblems(document: Document.Parsed, at: (offset: number) => Place): readonly Problem[] {
+  return [...document.errors, ...document.warnings].map(({ code, message, pos }) => {
+    if (code === 'MULTIPLE_DOCS') return problemAt(null, at(pos[0]), severalDocuments);
+    return problemAt(null, at(pos[0]), {
+      code: 'yaml-syntax',
+      expected: 'YAML 1.2',
+      received: displayed(message.split('\n')[0]!),
+      fix: remedies[code] ?? 'correct the YAML at this place; put unusual text in quotes',
+    });
+  });
+}
+
+const severalDocuments = {
+  code: 'several-documents',
+  expected: 'one document',
+  received: 'a second one, after ---',
+  fix: 'keep one specification in a file',
+};

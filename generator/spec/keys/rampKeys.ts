@@ -1,0 +1,131 @@
+import type { SpecKey } from './SpecKey.ts';
+
+const seriesNames = ['E6', 'E12', 'E24', 'E48', 'E96', 'E192'];
+const unstable = 'at a damping index of 0.5 the loop is on the edge of instability';
+
+/** The goal, and how the ramp is to be made. */
+export const rampKeys: readonly SpecKey[] = [
+  {
+    path: 'goal.dampingQ',
+    form: { kind: 'value', dimension: 'number', bounds: [0.02, 300] },
+    doc: 'Largest Q of the double pole at half the switching frequency; this or dampingIndex.',
+    example: '1',
+    flag: '--q',
+    starter: true,
+    replaces: ['goal.dampingIndex'],
+    remedies: { magnitude: unstable },
+    assumed: ({ has }) =>
+      has('goal.dampingIndex') ? null : { text: '1', reason: 'goal not given: Q of at most 1, well damped' },
+  },
+  {
+    path: 'goal.dampingIndex',
+    form: { kind: 'value', dimension: 'number', bounds: [0.501, 20] },
+    doc: 'Least damping index x; this or dampingQ.',
+    example: '0.8183',
+    flag: '--index',
+    replaces: ['goal.dampingQ'],
+    remedies: { magnitude: unstable },
+  },
+  {
+    path: 'goal.ceiling',
+    form: { kind: 'value', dimension: 'number', bounds: [0.501, 100] },
+    doc: 'Damping index above which a warning calls the loop sluggish.',
+    example: '1.5',
+    remedies: { magnitude: unstable },
+    assumed: { text: '1.5', reason: 'not given: common practice; above it a warning is given' },
+  },
+  {
+    path: 'goal.signalFloor',
+    form: { kind: 'value', dimension: 'voltage', zero: true, bounds: [1e-6, 10] },
+    doc: 'Current signal at the trip below which a warning is given.',
+    example: '20 mV',
+    assumed: { text: '20 mV', reason: 'not given: what comparator offset and noise leave usable; a warning' },
+  },
+  {
+    path: 'ramp.law',
+    form: { kind: 'choice', choices: ['fixed', 'vin', 'vout', 'constant-q'] },
+    doc: 'What the slope follows.',
+    example: 'vin',
+    flag: '--law',
+    starter: true,
+    assumed: { text: 'vin', reason: 'law not given: a slope proportional to the input needs the input only' },
+  },
+  {
+    path: 'ramp.gain',
+    form: { kind: 'gain' },
+    doc: 'Judge this gain instead of the least: k, p or x; for the fixed law S·L in volts.',
+    example: '0.75',
+    flag: '--gain',
+  },
+  {
+    path: 'ramp.build',
+    form: {
+      kind: 'choice',
+      choices: [
+        'auto',
+        'board-rc',
+        'board-mirror',
+        'board-opamp',
+        'board-follower',
+        'board-gate',
+        'board-pin',
+        'chip',
+      ],
+    },
+    doc: 'The circuit that makes the ramp.',
+    example: 'auto',
+    flag: '--build',
+    assumed: { text: 'auto', reason: 'build not given: the one that suits the law is taken' },
+  },
+  {
+    path: 'ramp.injection',
+    form: { kind: 'choice', choices: ['sense', 'control'] },
+    doc: 'Where the ramp is added: to the sensed current, or taken from the control voltage.',
+    example: 'sense',
+    flag: '--injection',
+    assumed: { text: 'sense', reason: 'injection not given: at the sense input, which every controller has' },
+  },
+  {
+    path: 'ramp.series.resistor',
+    form: { kind: 'choice', choices: seriesNames },
+    doc: 'Preferred values of the resistors.',
+    example: 'E96',
+    assumed: { text: 'E96', reason: 'not given: 1 % resistors are stocked in it' },
+  },
+  {
+    path: 'ramp.series.capacitor',
+    form: { kind: 'choice', choices: seriesNames },
+    doc: 'Preferred values of the capacitors.',
+    example: 'E12',
+    assumed: { text: 'E12', reason: 'not given: C0G capacitors are stocked in it' },
+  },
+  {
+    path: 'ramp.supply',
+    form: { kind: 'value', dimension: 'voltage', tolerance: true, bounds: [0.5, 100] },
+    doc: 'Supply of the ramp circuit; its lowest value sets the headroom.',
+    example: '5 V ± 5 %',
+    flag: '--supply',
+    starter: true,
+    assumed: { text: '5 V ± 5 %', reason: 'supply not given: the usual auxiliary rail' },
+  },
+  {
+    path: 'ramp.capacitance',
+    form: { kind: 'value', dimension: 'capacitance', tolerance: true, bounds: [1e-15, 1e-3] },
+    doc: 'A timing capacitor that is settled already; left out, it is chosen.',
+    example: '470 pF',
+  },
+  {
+    path: 'ramp.follows',
+    form: { kind: 'choice', choices: ['nothing', 'frequency'] },
+    doc: 'Whether the slope follows the oscillator.',
+    example: 'nothing',
+    assumed: { text: 'nothing', reason: 'not given: the slope does not depend on the frequency' },
+  },
+  {
+    path: 'ramp.reset',
+    form: { kind: 'choice', choices: ['clock', 'gate'] },
+    doc: 'What discharges the timing capacitor.',
+    example: 'clock',
+    assumed: { text: 'clock', reason: 'not given: reset by the clock, also where a pulse is skipped' },
+  },
+];
