@@ -21,10 +21,15 @@ export function assume(entries: Entries, given: ReadonlyMap<string, ReadValue>):
   const assumptions: Assumption[] = [];
   for (const key of specKeys) {
     const value = given.get(key.path);
-    if (value !== undefined) assumptions.push(...takenAsExact(key, value));
+    if (value !== undefined) assumptions.push(...(hasEffect(key, values) ? takenAsExact(key, value) : []));
     else if (!entries.has(key.path)) assumptions.push(...leftOut(key, entries, values));
   }
   return { values, assumptions: withLosses(entries, assumptions) };
+}
+
+function hasEffect({ converters }: SpecKey, values: ReadonlyMap<string, ReadValue>): boolean {
+  const converter = values.get('converter');
+  return converters === undefined || (converter?.kind === 'word' && converters.includes(converter.word));
 }
 
 function leftOut(key: SpecKey, entries: Entries, values: Map<string, ReadValue>): readonly Assumption[] {

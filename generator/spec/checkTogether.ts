@@ -3,6 +3,7 @@ import { type Entry, problemAt } from './entries/Entry.ts';
 import { ReadValues } from './forms/ReadValue.ts';
 import { publicName, specKey, specKeys } from './keys/specKeys.ts';
 import type { ValueReading } from './readValues.ts';
+import { wanted } from './values/dimensions.ts';
 import { displayed } from './values/ValueFault.ts';
 import { writeSpan } from './values/writeSpan.ts';
 
@@ -14,7 +15,7 @@ export function missingKeys(entries: Entries, document: Place | null): readonly 
     .filter((key) => key.required === true && !entries.has(key.path))
     .map((key) => {
       const place = document ?? { path: key.flag!, line: null, column: null };
-      const expected = `${key.path}: ${key.doc.replace(/\.$/, '')}`;
+      const expected = `${key.path}: ${key.form.kind === 'value' ? wanted(key.form.dimension) : key.example}`;
       const fix = `write ${key.path}: ${key.example}, or pass ${key.flag} "${key.example}"`;
       return problemAt(key.path, place, { code: 'key-missing', expected, received: 'nothing', fix });
     });

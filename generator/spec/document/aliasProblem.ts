@@ -1,35 +1,34 @@
-import type { Document } from 'yaml';
+import type { Alias, Document } from 'yaml';
 import type { Place, Problem } from '../../base/Problem.ts';
 import { problemAt } from '../entries/Entry.ts';
+import { displayed, type ValueFault } from '../values/ValueFault.ts';
 
 /** A specification repeats a value or two; more is an attempt to fill the memory. */
 const mostAliases = 100;
 
-/** Aliases that expand beyond the bound, or null. */
+/** An alias of nothing, or aliases that expand beyond the bound; else null. */
 export function aliasProblem(
   document: Document.Parsed,
   yaml: typeof import('yaml'),
   at: (offset: number) => Place,
 ): Problem | null {
-  let first: number | null = null;
-  let count = 0;
+  const aliases: Alias[] = [];
+  const anchors = new Set<string>();
   yaml.visit(document, {
-    Alias: (_, alias) => {
-      first ??= alias.range?.[0] ?? 0;
-      count += 1;
+    Node: (_, node) => {
+      if (yaml.isAlias(node)) aliases.push(node);
+      else if ('anchor' in node && typeof node.anchor === 'string') anchors.add(node.anchor);
     },
   });
-  if (first === null || (count <= mostAliases && expands(document))) return null;
-  return problemAt(null, at(first), {
-    code: 'alias-expansion',
-    expected: `aliases that stand for at most ${mostAliases} values together`,
-    received: 'aliases that expand beyond that, or into themselves',
-    fix: 'write the values out',
-  });
+  const place = (alias: Alias) => at(alias.range?.[0] ?? 0);
+  const lost = aliases.find(({ source }) => !anchors.has(source));
+  if (lost !== undefined) return problemAt(null, place(lost), unknownAlias(lost.source));
+  if (aliases.length === 0 || (aliases.length <= mostAliases && staysSmall(document))) return null;
+  return problemAt(null, place(aliases[0]!), tooManyAliases);
 }
 
 /** The parser counts what aliases of aliases stand for. */
-function expands(document: Document.Parsed): boolean {
+function staysSmall(document: Document.Parsed): boolean {
   try {
     document.toJS({ mapAsMap: true, maxAliasCount: mostAliases });
     return true;
@@ -37,4 +36,20 @@ function expands(document: Document.Parsed): boolean {
     if (error instanceof ReferenceError) return false;
     throw error;
   }
+}
+
+const tooManyAliases: ValueFault = {
+  code: 'alias-expansion',
+  expected: `aliases that stand for at most ${mostAliases} values together`,
+  received: 'aliases that expand beyond that',
+  fix: 'write the values out',
+};
+
+function unknownAlias(name: string): ValueFault {
+  return {
+    code: 'alias-unknown',
+    expected: 'an alias whose anchor stands before it',
+    received: displayed(`*${name}`),
+    fix: 'write the value out; put text that begins with * in quotes',
+  };
 }

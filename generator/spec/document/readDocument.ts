@@ -5,7 +5,8 @@ import { problemAt } from '../entries/Entry.ts';
 import type { EntryReading } from '../entries/readFlags.ts';
 import { displayed } from '../values/ValueFault.ts';
 import { aliasProblem } from './aliasProblem.ts';
-import { readMap } from './readMap.ts';
+import { nestsTooDeep } from './nestsTooDeep.ts';
+import { mostProblems, readMap } from './readMap.ts';
 import { yamlProblems } from './yamlProblems.ts';
 
 export interface SpecDocument {
@@ -23,6 +24,7 @@ export interface DocumentReading extends EntryReading {
 export async function readDocument(document: SpecDocument): Promise<DocumentReading> {
   const { name, text } = document;
   if (isTooLarge(text)) return broken([tooLarge(name, `${text.length} characters`)]);
+  if (nestsTooDeep(text)) return broken([nesting(name)]);
   const yaml = await import('yaml');
   const lines = new yaml.LineCounter();
   const at = (offset: number): Place => {
@@ -34,11 +36,13 @@ export async function readDocument(document: SpecDocument): Promise<DocumentRead
       lineCounter: lines,
       prettyErrors: false,
       uniqueKeys: false,
-      logLevel: 'silent',
+      logLevel: 'error',
     } as const;
     const parsed = yaml.parseDocument(text.replace(/^\ufeff/, ''), options);
-    const problems = yamlProblems(parsed, at);
-    return problems.length > 0 ? broken(problems) : readContents(parsed, yaml, at);
+    if (parsed.errors.some(({ code }) => code === 'RESOURCE_EXHAUSTION')) return broken([nesting(name)]);
+    if (parsed.errors.length > 0) return broken(yamlProblems(parsed.errors, at));
+    const reading = readContents(parsed, yaml, at);
+    return { ...reading, problems: [...yamlProblems(parsed.warnings, at), ...reading.problems] };
   } catch (error) {
     // The parser is recursive: nesting far beyond any specification ends its stack.
     if (error instanceof RangeError) return broken([nesting(name)]);
@@ -55,8 +59,11 @@ function readContents(
   if (aliases !== null) return broken([aliases]);
   const root = parsed.contents as ParsedNode | null;
   if (root === null || (yaml.isScalar(root) && root.value === null)) return broken([empty(at(0))]);
-  if (!yaml.isMap(root)) return broken([notAMap(at(root.range[0]), String(root.toString().split('\n')[0]))]);
-  return { ...readMap(root, { yaml, document: parsed, at }), isWhole: true };
+  if (!yaml.isMap(root)) {
+    return broken([notAMap(at(root.range[0]), yaml.isScalar(root) ? String(root.value) : 'a list')]);
+  }
+  const reading = readMap(root, { yaml, document: parsed, at });
+  return { ...reading, isWhole: reading.problems.length <= mostProblems };
 }
 
 function broken(problems: readonly Problem[]): DocumentReading {

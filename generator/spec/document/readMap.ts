@@ -12,17 +12,30 @@ export interface DocumentContext {
   readonly at: (offset: number) => Place;
 }
 
+/** A document with more is no specification: listing its every line helps nobody. */
+export const mostProblems = 100;
+
 /** The keys of a map and of the groups in it; no deeper than the table of keys goes. */
 export function readMap(map: YAMLMap, context: DocumentContext, group = ''): EntryReading {
   const entries: Entry[] = [];
   const problems: Problem[] = [];
   const lineOf = new Map<string, number | null>();
   for (const pair of map.items) {
+    if (problems.length >= mostProblems) return { entries, problems: [...problems, andMore(pair, context)] };
     const reading = readPair(pair as Pair<ParsedNode, ParsedNode | null>, context, group, lineOf);
     entries.push(...reading.entries);
     problems.push(...reading.problems);
   }
   return { entries, problems };
+}
+
+function andMore(pair: Pair, { at }: DocumentContext): Problem {
+  return problemAt(null, at((pair.key as ParsedNode).range[0]), {
+    code: 'too-many-problems',
+    expected: 'a specification',
+    received: `more than ${mostProblems} problems; the rest is not read`,
+    fix: 'mend those above first',
+  });
 }
 
 function readPair(
@@ -36,7 +49,7 @@ function readPair(
   if (!context.yaml.isScalar(key)) return refused(null, place, keyForm);
   const name = textOf(key);
   const path = group === '' ? name : `${group}.${name}`;
-  const fault = keyFault(group, name);
+  const fault = keyFault(group, name, 'nested');
   if (fault !== null) return refused(path, place, fault);
   if (lineOf.has(name)) return refused(path, place, duplicate(name, lineOf.get(name)!));
   lineOf.set(name, place.line);

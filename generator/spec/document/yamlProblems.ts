@@ -1,7 +1,10 @@
-import type { Document, ErrorCode } from 'yaml';
+import type { ErrorCode, YAMLError } from 'yaml';
 import type { Place, Problem } from '../../base/Problem.ts';
 import { problemAt } from '../entries/Entry.ts';
 import { displayed } from '../values/ValueFault.ts';
+
+/** Complaints beyond these are consequences of the first. */
+const mostProblems = 10;
 
 const remedies: Readonly<Partial<Record<ErrorCode, string>>> = {
   TAB_AS_INDENT: 'indent with spaces',
@@ -14,9 +17,15 @@ const remedies: Readonly<Partial<Record<ErrorCode, string>>> = {
   TAG_RESOLVE_FAILED: 'remove the tag: values need none; put text that begins with ! in quotes',
 };
 
-/** Everything the parser complains of; a tag that it does not know included, a second document by its own name. */
-export function yamlProblems(document: Document.Parsed, at: (offset: number) => Place): readonly Problem[] {
-  return [...document.errors, ...document.warnings].map(({ code, message, pos }) => {
+/** What the parser complains of, once for each place; a second document by its own name. */
+export function yamlProblems(
+  errors: readonly YAMLError[],
+  at: (offset: number) => Place,
+): readonly Problem[] {
+  const first = errors.filter(
+    (error, index) => errors.findIndex(({ pos }) => pos[0] === error.pos[0]) === index,
+  );
+  return first.slice(0, mostProblems).map(({ code, message, pos }) => {
     if (code === 'MULTIPLE_DOCS') return problemAt(null, at(pos[0]), severalDocuments);
     return problemAt(null, at(pos[0]), {
       code: 'yaml-syntax',

@@ -47,7 +47,7 @@ function setEntry(text: string): Entry | Problem {
   const group =
     membersOf(name.slice(0, Math.max(dot, 0))) === undefined ? '' : name.slice(0, Math.max(dot, 0));
   const fault =
-    membersOf(name) === undefined ? keyFault(group, name.slice(group === '' ? 0 : dot + 1)) : null;
+    membersOf(name) === undefined ? keyFault(group, name.slice(group === '' ? 0 : dot + 1), 'dotted') : null;
   return problemAt(name, flagPlace('--set'), fault ?? kindFault(name, displayed(text.slice(cut + 1))));
 }
 

@@ -1,8 +1,14 @@
 import { nearest } from '../../base/nearest.ts';
 import { membersOf, publicName, specFlags, specKeys } from './specKeys.ts';
 
-/** How to mend a key that is not known in its group (`''` for the top). */
-export function suggestKey(group: string, name: string): string {
+export type KeyNotation = 'nested' | 'dotted';
+
+/**
+ * How to mend a key that is not known in its group (`''` for the top).
+ * @param form how the user names keys: nested in a document, dotted on the command line
+ */
+export function suggestKey(group: string, name: string, form: KeyNotation): string {
+  const asWritten = form === 'dotted' ? dotted : nested;
   if (/^[\d.]+ ?[A-Za-z%]*$/.test(name))
     return 'inside { } a comma parts keys: write numbers with a decimal point';
   if (name === '<<') return 'YAML 1.2 merges no keys: write them out';
@@ -25,8 +31,8 @@ function exactElsewhere(name: string): string | null {
 
 function nearestElsewhere(name: string): string | null {
   const paths = specKeys.map((key) => key.path);
-  const dotted = nearest(name, paths);
-  if (dotted !== null) return publicName(dotted);
+  const whole = nearest(name, paths);
+  if (whole !== null) return publicName(whole);
   const last = nearest(
     name,
     paths.map((path) => path.split('.').at(-1)!),
@@ -38,8 +44,12 @@ function lastName(path: string): string {
   return path.split('.').at(-1)!.toLowerCase();
 }
 
+function dotted(path: string): string {
+  return `write ${path}`;
+}
+
 /** `write frequency`, `write law under ramp` */
-function asWritten(path: string): string {
+function nested(path: string): string {
   const at = path.lastIndexOf('.');
   return at < 0 ? `write ${path}` : `write ${path.slice(at + 1)} under ${path.slice(0, at)}`;
 }
