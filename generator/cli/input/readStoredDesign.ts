@@ -1,0 +1,62 @@
+import type { Problem } from '../../base/Problem.ts';
+import type { Result } from '../../emit/resultSchema.ts';
+import type { FileSystem } from '../../emit/write/FileSystem.ts';
+import type { StoredSet } from '../../emit/write/readFileSet.ts';
+import type { ReadSpecification } from '../../spec/readSpecification.ts';
+import { exitCodes } from '../exitCodes.ts';
+import type { Session } from '../Session.ts';
+import { ending, folderStep, going, type Step, stepOf } from '../Step.ts';
+
+/** A folder's design, sized again from what its result says was asked for. */
+export interface StoredDesign {
+  readonly result: Result;
+  readonly design: unknown;
+  /** The decks as they are on disk now. */
+  readonly decks: ReadonlyMap<string, string>;
+}
+
+const resultFile = 'result.json';
+
+/**
+ * Reads a design folder, and sizes its design again.
+ *
+ * The predictions are worth something only if nobody touched what they follow from, so an edited
+ * `result.json` is refused; edited decks are what the command is for.
+ */
+export async function readStoredDesign(directory: string, session: Session): Promise<Step<StoredDesign>> {
+  const { cwd, fs, signal } = session.surroundings;
+  const { readFileSet } = await import('../../emit/write/readFileSet.ts');
+  const request = { directory, cwd, fs: fs as FileSystem, ...(signal === undefined ? {} : { signal }) };
+  const set = folderStep(await readFileSet(request), session);
+  if (!set.ok) return set;
+  const result = resultOf(set.value);
+  if (result === null) return ending(exitCodes.refused, unusable(directory));
+  const design = stepOf(await session.stages.design(requestOf(result)), session);
+  return design.ok ? going({ result, design: design.value, decks: set.value.decks }) : design;
+}
+
+function resultOf({ result, differing }: StoredSet): Result | null {
+  const isOurs = (result as Partial<Result> | null)?.schema === 'counterslope/result/1';
+  return isOurs && !differing.includes(resultFile) ? (result as Result) : null;
+}
+
+/** The specification of a result is the normalised one; where its keys stood is no longer known. */
+function requestOf({ specification, assumptions }: Result): ReadSpecification {
+  return {
+    specification: specification as unknown as ReadSpecification['specification'],
+    assumptions,
+    place: () => null,
+  };
+}
+
+function unusable(directory: string): Problem {
+  return {
+    code: 'result-edited',
+    severity: 'error',
+    key: null,
+    place: { path: `${directory}/${resultFile}`, line: null, column: null },
+    expected: 'the result as design wrote it',
+    received: 'an edited one, or one of another version',
+    fix: 'write the design again with counterslope design',
+  };
+}
