@@ -1,0 +1,96 @@
+import { failure, type Outcome, success } from '../base/Problem.ts';
+import type { Law } from '../law/Law.ts';
+import { comparedLaws, lawOf } from '../law/laws.ts';
+import { type GainSpread, indexExtremes, type LeastGain, leastGain } from '../law/leastGain.ts';
+import { type LoopCorners, loopCorners } from '../law/loopCorners.ts';
+import { demandOf } from '../ramp/demandOf.ts';
+import { buildRegion } from '../region/buildRegion.ts';
+import type { OperatingRegion } from '../region/OperatingRegion.ts';
+import { powerStageOf } from '../region/powerStages.ts';
+import { refuseGaps } from '../spec/notYet.ts';
+import type { ReadSpecification } from '../spec/readSpecification.ts';
+import { buildBoardOpamp } from './boardOpamp/buildBoardOpamp.ts';
+import { sizeBoardOpamp } from './boardOpamp/sizeBoardOpamp.ts';
+import type { SizedDesign, SizedLaw } from './SizedDesign.ts';
+
+/** Sizing from the specification to the circuit: region → law → ramp → parts → circuit. */
+export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
+  const { specification } = request;
+  const ready = refuseGaps(request);
+  if (!ready.ok) return ready;
+  const { inductance } = specification;
+  if (inductance?.kind !== 'value') return failure([inductanceMissing(request)]);
+
+  const region = buildRegion(request, powerStageOf(specification.converter)!);
+  if (!region.ok) return region;
+  const corners = loopCorners(specification, inductance);
+  const goal = specification.goal.dampingIndex;
+  const law = lawOf(specification.ramp.law)!;
+  const required = leastGain(law, region.value, corners, goal);
+
+  if (required.gain === 0 && specification.ramp.gain === null)
+    return failure([rampNotNeeded(request, region.value)]);
+  const demand = demandOf(specification, corners, required.gain);
+  const sizing = sizeBoardOpamp(demand, request);
+  if (!sizing.ok) return sizing;
+  const { spread, senseSlope_per_s, wantedSlope_per_s } = sizing.value;
+  const sized = (of: Law, least: LeastGain, gain: number, realisedGain: number) =>
+    sizedLaw(of, least, gain, realisedGain, region.value, corners, spread);
+  const other = law.kind === 'fixed' ? comparedLaws.adaptive : comparedLaws.fixed;
+  const otherLeast = leastGain(other, region.value, corners, goal);
+  const otherGain = otherLeast.gain / spread.low;
+  return success({
+    request,
+    region: region.value,
+    corners,
+    chosen: sized(
+      law,
+      required,
+      wantedSlope_per_s * demand.gainPerSlope,
+      senseSlope_per_s * demand.gainPerSlope,
+    ),
+    alternative: sized(other, otherLeast, otherGain, otherGain),
+    demand,
+    sizing: sizing.value,
+    circuit: buildBoardOpamp(sizing.value, demand),
+  });
+}
+
+function sizedLaw(
+  law: Law,
+  required: LeastGain,
+  gain: number,
+  realisedGain: number,
+  region: OperatingRegion,
+  corners: LoopCorners,
+  spread: GainSpread,
+): SizedLaw {
+  const extremes = indexExtremes(law, realisedGain, region, corners, spread);
+  return { law, required, gain, realisedGain, extremes };
+}
+
+function inductanceMissing({ place }: ReadSpecification) {
+  return {
+    code: 'missing-key',
+    severity: 'error' as const,
+    key: 'inductance',
+    place: place('inductance'),
+    expected: 'an inductance: a circuit is sized for one',
+    received: 'nothing',
+    fix: "add inductance, for example 'inductance: 10 uH ± 20 %', or --l 10uH",
+  };
+}
+
+/** Every duty is so low that the loop meets its goal by itself. */
+function rampNotNeeded({ specification, place }: ReadSpecification, region: OperatingRegion) {
+  const least = Math.min(...region.vertices.map((vertex) => 1 - vertex.duty));
+  return {
+    code: 'no-circuit',
+    severity: 'error' as const,
+    key: 'ramp.gain',
+    place: place('ramp.gain'),
+    expected: `goal of the damping index > least damping index without any ramp: above ${least.toPrecision(4)}`,
+    received: specification.goal.dampingIndex.toPrecision(4),
+    fix: 'no ramp is needed over this region; to build one all the same, give ramp.gain',
+  };
+}

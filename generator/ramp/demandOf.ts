@@ -1,0 +1,49 @@
+import { outerInterval } from '../base/Quantity.ts';
+import type { LoopCorners } from '../law/loopCorners.ts';
+import type { Specification } from '../spec/Specification.ts';
+import type { RampDemand } from './RampDemand.ts';
+
+/** Reference that a fixed ramp is fed from: 2.5 V within 1 %, what any shunt reference reaches (common practice). */
+export const rampReference = { voltage_V: 2.5, toleranceRatio: 0.01 } as const;
+
+/**
+ * Turns a law's gain into the slope that a generator owes per tracked volt.
+ *
+ *   vin:   Se = k·Ri/L per volt of input
+ *   fixed: Se = S·L·Ri/L per V_ref volts of reference
+ *
+ * with Ri nominal and L the inductance that the gain refers to.
+ * @param requiredGain what the worst unit must deliver: k, or S·L in volts
+ */
+export function demandOf(
+  specification: Specification,
+  corners: LoopCorners,
+  requiredGain: number,
+): RampDemand {
+  const { frequency_Hz, maximumDutyRatio, ramp } = specification;
+  const tracks = ramp.law === 'fixed' ? 'reference' : 'input';
+  const reference = rampReference.voltage_V;
+  const unit_V = tracks === 'reference' ? reference : 1;
+  const gainPerSlope = (unit_V * corners.referenceInductance_H) / corners.senseGain_V_per_A.nominal;
+  return {
+    law: ramp.law,
+    tracks,
+    track_V:
+      tracks === 'reference' ? { low: reference, high: reference } : outerInterval(specification.input_V),
+    trackToleranceRatio: tracks === 'reference' ? rampReference.toleranceRatio : 0,
+    requiredSlope_per_s: requiredGain / gainPerSlope,
+    givenSlope_per_s: ramp.gain === null ? null : ramp.gain / gainPerSlope,
+    gainPerSlope,
+    riseTime_s: maximumDutyRatio / frequency_Hz.from.low,
+    resetTime_s: (1 - maximumDutyRatio) / frequency_Hz.to.high,
+    period_s: nominalPeriod_s(specification),
+    supply_V: ramp.supply_V,
+    series: ramp.series,
+    capacitance_F: ramp.capacitance_F?.nominal ?? null,
+  };
+}
+
+/** Period of the nominal frequency, of the middle of a range [s]. */
+export function nominalPeriod_s({ frequency_Hz }: Specification): number {
+  return 2 / (frequency_Hz.from.nominal + frequency_Hz.to.nominal);
+}
