@@ -108,8 +108,9 @@ async function start() {
   console.error = (text) => {
     lines += 1;
     if (lines <= LINES_PER_RUN) post({ kind: 'line', text: String(text) });
-    if (LAST_WORDS.test(String(text))) post({ kind: 'gone', log: simulation.getInfo() });
+    if (LAST_WORDS.test(String(text))) post({ kind: 'gone', ...said() });
   };
+  const said = () => ({ standardError: simulation.getError().join('\n'), log: simulation.getInfo() });
   let files = null;
   let raw = null;
   onceThereAreFiles(simulation, (found) => {
@@ -136,7 +137,7 @@ async function start() {
     lines = 0;
     simulation.setNetList(text);
     await simulation.runSim();
-    post({ kind: 'finished', raw, log: simulation.getInfo() }, raw === null ? [] : [raw.buffer]);
+    post({ kind: 'finished', raw, ...said() }, raw === null ? [] : [raw.buffer]);
   };
   post({ kind: 'ready', banner: simulation.getInitInfo() });
   return run;

@@ -88,15 +88,17 @@ function runInThread(
   timeout_s: number,
 ): Promise<RunOutcome> {
   const lines: string[] = [];
-  const accept = (raw: Uint8Array | null, log: string, problem: string | null) =>
-    acceptRun(deck, { runTitle, raw, standardError: lines.join('\n'), log, problem });
   const outcome = listen<RunOutcome>(thread, timeout_s, {
     message: (message) => {
       if (message.kind === 'line') lines.push(message.text);
-      if (message.kind === 'gone') return accept(null, message.log, 'the engine gave up');
-      return message.kind === 'finished' ? accept(message.raw, message.log, null) : null;
+      if (message.kind === 'finished') return acceptRun(deck, { ...message, runTitle, problem: null });
+      if (message.kind !== 'gone') return null;
+      return acceptRun(deck, { ...message, runTitle, raw: null, problem: 'the engine gave up' });
     },
-    lost: (reason) => accept(null, lines.join('\n'), reason),
+    lost: (problem) => {
+      const standardError = lines.join('\n');
+      return acceptRun(deck, { runTitle, raw: null, standardError, log: standardError, problem });
+    },
   });
   const request: RunRequest = { text, includes: deck.includes };
   thread.postMessage(request);

@@ -12,6 +12,7 @@ const PROGRAMS = process.platform === 'win32' ? ['ngspice_con.exe', 'ngspice.exe
 const DECK_FILE = 'counterslope-run.cir';
 const RAW_FILE = 'counterslope-run.raw';
 const LOG_LIMIT_CHARS = 200_000;
+const CUT_SHORT = '(and more, not kept)';
 const VERSION_LIMIT_S = 20;
 
 /**
@@ -148,7 +149,7 @@ function execute(
   });
 }
 
-/** The beginning of what was said: complaints about the deck come first. */
+/** The beginning of what was said, and that there was more: on standard error that is a complaint too. */
 function bounded(text: string): string {
-  return text.length > LOG_LIMIT_CHARS ? text.slice(0, LOG_LIMIT_CHARS) : text;
+  return text.length > LOG_LIMIT_CHARS ? `${text.slice(0, LOG_LIMIT_CHARS)}\n${CUT_SHORT}` : text;
 }
