@@ -1,0 +1,72 @@
+import { isBuiltin } from 'node:module';
+import { join } from 'node:path';
+import { build } from 'esbuild';
+import { ruleDeckEsbuild } from './ruleCompiler.mjs';
+import { templateEsbuild } from './templateCompiler.mjs';
+
+const shared = {
+  bundle: true,
+  target: 'node20',
+  metafile: true,
+  legalComments: 'none',
+  logLevel: 'warning',
+  // Large, and loaded for few tasks: they stay packages of their own.
+  external: ['eecircuit-engine', 'mathjs'],
+  plugins: [templateEsbuild(), ruleDeckEsbuild()],
+};
+
+/**
+ * The command as one script, a function of `require`, `__filename` and `__dirname`.
+ *
+ * CommonJS, for a script takes a code cache and a graph of ES modules none. ASCII, so that it is read
+ * without decoding. What is imported dynamically starts when it is first asked for.
+ */
+export function bundleCommand(root, folder) {
+  return build({
+    ...shared,
+    entryPoints: { cli: join(root, 'generator/cli/entry.ts') },
+    outdir: folder,
+    outExtension: { '.js': '.cjs' },
+    format: 'cjs',
+    platform: 'node',
+    charset: 'ascii',
+    minifyWhitespace: true,
+    minifySyntax: true,
+    banner: { js: '(function(require,__filename,__dirname){var module={exports:{}};' },
+    footer: { js: '})' },
+    // Read by yargs alone, which looks for its own folder: any absolute file URL does.
+    define: { 'import.meta.url': '"file:///"' },
+  });
+}
+
+/** The library as ES modules; what needs Node lies in chunks that only `main` asks for. */
+export function bundleLibrary(root, folder) {
+  return build({
+    ...shared,
+    entryPoints: { index: join(root, 'generator/index.ts') },
+    outdir: folder,
+    format: 'esm',
+    platform: 'neutral',
+    mainFields: ['module', 'main'],
+    splitting: true,
+    chunkNames: 'library/[name]-[hash]',
+    plugins: [nodeAtRunTime(), ...shared.plugins],
+  });
+}
+
+/**
+ * Takes Node's own modules from the process that runs, if it is Node, in place of importing them: so a
+ * browser's bundler finds nothing that it cannot resolve.
+ */
+function nodeAtRunTime() {
+  return {
+    name: 'node-at-run-time',
+    setup({ onResolve, onLoad }) {
+      onResolve({ filter: /.*/ }, ({ path }) => (isBuiltin(path) ? { path, namespace: 'node' } : undefined));
+      onLoad({ filter: /.*/, namespace: 'node' }, ({ path }) => ({
+        contents: `module.exports = globalThis.process?.getBuiltinModule?.(${JSON.stringify(path)}) ?? {};`,
+        loader: 'js',
+      }));
+    },
+  };
+}
