@@ -41,6 +41,8 @@ export const opamp = {
   inputResistance_ohm: 1e9,
   outputResistance_ohm: 20,
   offset_V: 1e-3,
+  /** CMOS input, hot [A]. */
+  inputBias_A: 1e-9,
   /** Closest that the output comes to the supply [V]. */
   outputMargin_V: 0.1,
 } as const;

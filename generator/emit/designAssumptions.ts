@@ -1,0 +1,61 @@
+import type { Assumption } from '../base/Assumption.ts';
+import type { SizedDesign } from '../circuit/SizedDesign.ts';
+import { dampingIndex } from '../law/innerLoop.ts';
+import { rampReference } from '../ramp/demandOf.ts';
+import type { RegionPoint } from '../region/OperatingRegion.ts';
+
+/** Inductance that saturation might leave, and extra duty that losses might take, where neither is given. */
+const saturationShare = 0.7;
+const extraDuty = 1.05;
+
+/** What the sizing takes for granted besides the spec's own keys, each with what it would cost if it fails. */
+export function designAssumptions(design: SizedDesign): readonly Assumption[] {
+  const { specification } = design.request;
+  const { inductance } = specification;
+  const worst = design.chosen.extremes.min;
+  const assumptions: Assumption[] = [];
+  if (inductance?.kind === 'value' && inductance.atPeakLimit_H === null)
+    assumptions.push({
+      key: 'inductance.atPeakLimit',
+      value: indexWith(design, worst.at, saturationShare),
+      unit: '',
+      reason: `not given: the inductor is taken not to saturate up to the peak limit; with 30 % less inductance there the least damping index is this instead of ${worst.dampingIndex.toPrecision(4)}`,
+    });
+  if (specification.losses === null)
+    assumptions.push({
+      key: 'losses',
+      value: indexWith(design, stretched(worst.at), 1),
+      unit: '',
+      reason: `not given: the duty is that of a lossless stage; with 5 % more duty the least damping index is this instead of ${worst.dampingIndex.toPrecision(4)}`,
+    });
+  if (inductance?.kind === 'value' && inductance.value_H.from.nominal !== inductance.value_H.to.nominal)
+    assumptions.push({
+      key: 'inductance',
+      value: design.corners.referenceInductance_H,
+      unit: 'H',
+      reason:
+        'a range that the customer chooses from: gains refer to the least inductance of it, where the ramp binds',
+    });
+  if (design.demand.tracks === 'reference')
+    assumptions.push({
+      key: 'ramp.reference',
+      value: rampReference.voltage_V,
+      unit: 'V',
+      reason:
+        'the fixed ramp is fed from a reference of 2.5 V within 1 %, as a shunt reference or the controller offers',
+    });
+  return assumptions;
+}
+
+/** Damping index of the worst unit at a point with its ramp scaled by what the inductance leaves. */
+function indexWith(design: SizedDesign, at: RegionPoint, inductanceShare: number): number {
+  const { chosen, corners, sizing } = design;
+  const scale = corners.lambda.low * sizing.spread.low * inductanceShare;
+  return dampingIndex(at.up_V, at.swing_V, scale * chosen.realisedGain * chosen.law.basis_V(at));
+}
+
+/** The same point with more duty, the swing as it was. */
+function stretched(at: RegionPoint): RegionPoint {
+  const duty = Math.min(1, at.duty * extraDuty);
+  return { ...at, duty, up_V: at.swing_V * (1 - duty), down_V: at.swing_V * duty };
+}
