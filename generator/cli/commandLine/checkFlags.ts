@@ -82,12 +82,14 @@ function checkWords(words: readonly string[], command: Command): readonly Proble
       }),
     ];
   }
-  return words.slice(most).map((word) =>
-    usageProblem(word, {
+  const surplus = words.slice(most);
+  if (surplus.length === 0) return [];
+  return [
+    usageProblem(command.name, {
       code: 'word-unexpected',
-      expected: most === 0 ? `nothing after ${command.name}` : `no more words than ${command.synopsis}`,
-      received: word === '' ? 'an empty word' : word,
+      expected: most === 0 ? 'no word' : `no more than ${command.synopsis}`,
+      received: surplus.every((word) => word === '') ? 'an empty word' : `also ${surplus.join(' ')}`,
       fix: `write ${form}; a value with blanks in it goes in quotes`,
     }),
-  );
+  ];
 }

@@ -85,10 +85,10 @@ function repeated(given: Tokens['given']): readonly Problem[] {
 }
 
 function unknownFlag(typed: string, flags: readonly Flag[]): Problem {
-  const near = nearest(
-    typed.replace(/^-+/, ''),
-    flags.map((flag) => flag.name),
-  );
+  const name = typed.replace(/^-+/, '');
+  const names = flags.map((flag) => flag.name);
+  // A single letter is near to any other; as it stands it may lack its second dash.
+  const near = name.length > 1 ? nearest(name, names) : (names.find((known) => known === name) ?? null);
   return usageProblem(typed, {
     code: 'unknown-flag',
     expected: 'a known flag',
@@ -101,7 +101,7 @@ function valueMissing(typed: string, flag: Flag, next: string | undefined): Prob
   const name = flag.placeholder ?? 'VALUE';
   return usageProblem(typed, {
     code: 'value-missing',
-    expected: `a value (${name}) after the flag`,
+    expected: name === 'VALUE' ? 'a value after the flag' : `a value (${name}) after the flag`,
     received: next === undefined ? 'nothing' : `the flag ${next}`,
     fix:
       next === undefined ? `write ${typed} ${name}` : `write ${typed} ${name}, or ${typed}=${next} if meant`,

@@ -5,7 +5,7 @@ import { givenValues, type Invocation } from '../commandLine/Invocation.ts';
 import { usageProblem } from '../commandLine/usageProblem.ts';
 import { type ExitCode, exitCodes } from '../exitCodes.ts';
 import { decodeText } from '../input/decodeText.ts';
-import { readInput } from '../input/readInput.ts';
+import { readInput, ruleDeckFile } from '../input/readInput.ts';
 import { readRules } from '../input/readRules.ts';
 import type { Session } from '../Session.ts';
 import { conclude, ending, going, type Step, stepOf } from '../Step.ts';
@@ -77,7 +77,7 @@ async function explain(id: string, invocation: Invocation, session: Session): Pr
 async function test(path: string, invocation: Invocation, session: Session): Promise<Step<ExitCode>> {
   const base = await readRules(givenValues(invocation, 'rules'), session);
   if (!base.ok) return base;
-  const bytes = await readInput(path, 'a rule deck', session);
+  const bytes = await readInput(path, ruleDeckFile, session);
   if (!bytes.ok) return bytes;
   const text = decodeText(bytes.value, path);
   if (!text.ok) return text;

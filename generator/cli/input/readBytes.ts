@@ -1,7 +1,7 @@
 import type { CommandFileSystem, Input } from '../Surroundings.ts';
 
 /** More than any reader here accepts; what comes after is not even looked at, be the source endless. */
-const mostBytes = 2 * 1024 * 1024;
+export const mostBytes = 2 * 1024 * 1024;
 
 /** A file's first bytes, up to the bound. */
 export async function readFileBytes(path: string, fs: CommandFileSystem): Promise<Uint8Array> {

@@ -5,7 +5,16 @@ import { unlessInterrupted } from '../interruption.ts';
 import type { Session } from '../Session.ts';
 import { ending, going, interrupted, type Step } from '../Step.ts';
 import { absolutePath } from './absolutePath.ts';
-import { readFileBytes, readStreamBytes } from './readBytes.ts';
+import { mostBytes, readFileBytes, readStreamBytes } from './readBytes.ts';
+
+/** What a file should be, for messages, and how large its reader lets it be. */
+export interface InputKind {
+  readonly noun: string;
+  readonly most: string;
+}
+
+export const specificationFile: InputKind = { noun: 'a specification file', most: '1 MB' };
+export const ruleDeckFile: InputKind = { noun: 'a rule deck', most: '256 kB' };
 
 /** What the user got wrong about a path, by the system's code; other codes are the machine's fault. */
 const usersFaults: Readonly<Record<string, string>> = {
@@ -16,11 +25,12 @@ const usersFaults: Readonly<Record<string, string>> = {
   ELOOP: 'a link that leads round in a circle',
 };
 
-/**
- * The bytes of a file that the user named, `-` for standard input.
- * @param noun what it should be, for messages: `a specification file`
- */
-export async function readInput(path: string, noun: string, session: Session): Promise<Step<Uint8Array>> {
+/** The bytes of a file that the user named, `-` for standard input. */
+export async function readInput(
+  path: string,
+  { noun, most }: InputKind,
+  session: Session,
+): Promise<Step<Uint8Array>> {
   const { fs, stdin, cwd, signal } = session.surroundings;
   if (path === '' || path.includes('\0')) {
     return ending(exitCodes.refused, unreadable(path, noun, 'an empty or broken name'));
@@ -28,7 +38,8 @@ export async function readInput(path: string, noun: string, session: Session): P
   try {
     const reading = path === '-' ? readStreamBytes(stdin) : readFileBytes(absolutePath(path, cwd), fs);
     const bytes = await unlessInterrupted(reading, signal);
-    return bytes === 'interrupted' ? interrupted(session) : going(bytes);
+    if (bytes === 'interrupted') return interrupted(session);
+    return bytes.length < mostBytes ? going(bytes) : ending(exitCodes.refused, tooLarge(path, noun, most));
   } catch (error) {
     if (!isSystemError(error)) throw error;
     const fault = usersFaults[error.code];
@@ -53,4 +64,9 @@ function unreadable(path: string, noun: string, received: string): Problem {
     received,
     fix: received === 'no such file' ? 'check the name and the folder you are in' : 'name another file',
   };
+}
+
+function tooLarge(path: string, noun: string, most: string): Problem {
+  const words = { expected: `${noun} of at most ${most}`, received: 'far more', fix: 'name another file' };
+  return { ...unreadable(path, noun, ''), code: 'file-too-large', ...words };
 }

@@ -7,7 +7,7 @@ import type { Session } from '../Session.ts';
 import type { SpecificationSource } from '../Stages.ts';
 import { ending, going, type Step, stepOf } from '../Step.ts';
 import { specificationFlags } from '../specificationFlags.ts';
-import { readInput } from './readInput.ts';
+import { readInput, specificationFile } from './readInput.ts';
 import { sourceDate } from './sourceDate.ts';
 
 /** The specification from a file, from standard input, or from flags alone. */
@@ -39,7 +39,7 @@ async function readDocument(path: string, session: Session): Promise<Step<Specif
   if (path === '-' && session.surroundings.stdin.isTTY === true) {
     session.console.message('reading the specification from this terminal; end it with Ctrl-D');
   }
-  const bytes = await readInput(path, 'a specification file', session);
+  const bytes = await readInput(path, specificationFile, session);
   if (!bytes.ok) return bytes;
   const text = stepOf(await session.stages.decodeDocument(bytes.value, path), session);
   return text.ok ? going({ name: path, text: text.value }) : text;

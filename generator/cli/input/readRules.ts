@@ -2,7 +2,7 @@ import type { Rule, RuleDeck } from '../../rules/RuleDeck.ts';
 import type { Session } from '../Session.ts';
 import { endingOf, going, type Step, stepOf } from '../Step.ts';
 import { decodeText } from './decodeText.ts';
-import { readInput } from './readInput.ts';
+import { readInput, ruleDeckFile } from './readInput.ts';
 
 /** The shipped rules, extended or overridden by the decks that the user names. */
 export async function readRules(paths: readonly string[], session: Session): Promise<Step<readonly Rule[]>> {
@@ -17,7 +17,7 @@ export async function readRules(paths: readonly string[], session: Session): Pro
 }
 
 async function readDeck(path: string, session: Session): Promise<Step<RuleDeck>> {
-  const bytes = await readInput(path, 'a rule deck', session);
+  const bytes = await readInput(path, ruleDeckFile, session);
   if (!bytes.ok) return bytes;
   const text = decodeText(bytes.value, path);
   if (!text.ok) return text;

@@ -25,12 +25,24 @@ const resultFile = 'result.json';
  */
 export async function readStoredDesign(directory: string, session: Session): Promise<Step<StoredDesign>> {
   const { cwd, fs, signal } = session.surroundings;
+  if (directory.trim() === '' || directory.includes('\0')) {
+    return ending(
+      exitCodes.refused,
+      unusable(directory, 'a folder that design wrote', 'an empty or broken name'),
+    );
+  }
   const { readFileSet } = await import('../../emit/write/readFileSet.ts');
   const request = { directory, cwd, fs: fs as FileSystem, ...(signal === undefined ? {} : { signal }) };
   const set = folderStep(await readFileSet(request), session);
   if (!set.ok) return set;
   const result = resultOf(set.value);
-  if (result === null) return ending(exitCodes.refused, unusable(directory));
+  if (result === null) {
+    const path = `${directory}/${resultFile}`;
+    return ending(
+      exitCodes.refused,
+      unusable(path, 'the result as design wrote it', 'an edited or foreign one'),
+    );
+  }
   const design = stepOf(await session.stages.design(requestOf(result)), session);
   return design.ok ? going({ result, design: design.value, decks: set.value.decks }) : design;
 }
@@ -49,14 +61,14 @@ function requestOf({ specification, assumptions }: Result): ReadSpecification {
   };
 }
 
-function unusable(directory: string): Problem {
+function unusable(path: string, expected: string, received: string): Problem {
   return {
-    code: 'result-edited',
+    code: 'no-stored-design',
     severity: 'error',
     key: null,
-    place: { path: `${directory}/${resultFile}`, line: null, column: null },
-    expected: 'the result as design wrote it',
-    received: 'an edited one, or one of another version',
+    place: { path, line: null, column: null },
+    expected,
+    received,
     fix: 'write the design again with counterslope design',
   };
 }

@@ -2,7 +2,7 @@ import type { Result, WorstPoint } from '../../emit/resultSchema.ts';
 import { printable } from '../problems/printable.ts';
 import type { Alternative } from '../Stages.ts';
 import type { Paint } from '../terminal/paint.ts';
-import { figure, percent, plainNumber } from './figures.ts';
+import { figure, percent, plainNumber, volts } from './figures.ts';
 import { outcomeRows } from './outcomes.ts';
 import { simulationRow } from './simulation.ts';
 import { oneLine, row, rule, together } from './table.ts';
@@ -42,15 +42,15 @@ function stabilityRows({ stability, region, specification }: Result, paint: Pain
   const isStable = least > 0.5;
   const where = region.outputVoltage_V === null ? everyDuty(region.duty[1]) : 'over the whole region';
   const verdict = isStable
-    ? `yes, ${where}: x at least ${plainNumber(least)}, ${pointText(at)}`
-    : `not stable everywhere: x only ${plainNumber(least)}, ${pointText(at)}; ½ is the edge`;
+    ? `yes, ${where}: x at least ${plainNumber(least)} (${pointText(at)})`
+    : `not stable everywhere: x only ${plainNumber(least)} (${pointText(at)}); ½ is the edge`;
   const goal = goalOf(specification);
   const aim = goal === null ? '' : `goal ${plainNumber(goal)}; `;
   const settling =
     stability.settlingCyclesMax === null ? '' : `; settles in ${stability.settlingCyclesMax} cycles`;
   return [
     ...(isStable ? row('stable', verdict) : row('failed', verdict, paint.bad)),
-    ...row('', `${aim}x up to ${plainNumber(most)}, ${pointText(atMax)}${settling}`),
+    ...row('', `${aim}x up to ${plainNumber(most)} (${pointText(atMax)})${settling}`),
   ];
 }
 
@@ -59,8 +59,8 @@ function everyDuty(highest: number): string {
 }
 
 function pointText({ inputVoltage_V, outputVoltage_V, dutyRatio }: WorstPoint): string {
-  const output = outputVoltage_V === null ? '' : ` to ${figure(outputVoltage_V, 'V')}`;
-  return together(`at ${figure(inputVoltage_V, 'V')}${output}, duty ${percent(dutyRatio)}`);
+  const output = outputVoltage_V === null ? '' : `, ${volts(outputVoltage_V)} out`;
+  return together(`${volts(inputVoltage_V)} in${output}, duty ${percent(dutyRatio)}`);
 }
 
 function goalOf(specification: Result['specification']): number | null {
@@ -84,39 +84,37 @@ function lawRows({ law, stability }: Result, alternative: Alternative | null): s
   const gains = `${symbols[law.kind]} = ${realised} realised, ${designed} designed, ${least} least`;
   return [
     ...row('law', `${law.kind}, ${follows[law.kind]}: ${together(gains)}`),
-    ...row('cost', costText(stability, law.kind, alternative)),
+    ...costRows(stability, law.kind, alternative),
   ];
 }
 
-/** How far the loop is over-damped, against what the other law would do over the same region. */
-function costText(stability: Result['stability'], kind: string, alternative: Alternative | null): string {
-  const own = together(`x to ${plainNumber(stability.dampingIndexMax)}, α ${cycleRatios(stability)}`);
-  if (alternative === null) return own;
-  const other = together(`x to ${plainNumber(alternative.dampingIndexMax)}, α ${cycleRatios(alternative)}`);
-  return `${kind}: ${own}; ${alternative.kind} instead: ${other}`;
+/** How far the loop is over-damped, and what the other law would do over the same region. */
+function costRows(own: Cost, kind: string, alternative: Alternative | null): string[] {
+  const text = (name: string, cost: Cost) =>
+    together(`${name}  x to ${plainNumber(cost.dampingIndexMax)}, α ${cycleRatios(cost)}`);
+  if (alternative === null) return row('cost', text(kind, own));
+  const other = `${alternative.kind} instead`;
+  return [...row('cost', text(kind.padEnd(other.length), own)), ...row('', text(other, alternative))];
 }
 
-function cycleRatios({
-  cycleRatioMin,
-  cycleRatioMax,
-}: Pick<Alternative, 'cycleRatioMin' | 'cycleRatioMax'>): string {
+type Cost = Pick<Alternative, 'dampingIndexMax' | 'cycleRatioMin' | 'cycleRatioMax'>;
+
+function cycleRatios({ cycleRatioMin, cycleRatioMax }: Cost): string {
   return `${plainNumber(cycleRatioMin)} … ${plainNumber(cycleRatioMax)}`;
 }
 
 /** More would push the verdicts off the screen; bom.csv has them all. */
-const mostPartLines = 4;
+const mostPartLines = 3;
 
-function buildRows({ parts, specification, ramp }: Result): string[] {
-  const passives = parts.filter(({ kind }) => kind === 'capacitor' || kind === 'resistor');
-  const others =
-    parts.reduce((sum, { quantity }) => sum + quantity, 0) -
-    passives.reduce((sum, part) => sum + part.quantity, 0);
-  const texts = passives.map(({ reference, text }) => together(`${reference} ${text}`));
-  const head = `${buildOf(specification)}; C ${figure(ramp.capacitance_F, 'F')}`;
-  const rows = row('build', [head, ...texts, `and ${others} more`].join(', '));
-  return rows.length <= mostPartLines
-    ? rows
-    : [...rows.slice(0, mostPartLines - 1), row('', `… ${parts.length} parts in all`)[0]!];
+function buildRows({ parts, specification }: Result): string[] {
+  const named = ['capacitor', 'resistor'].flatMap((kind) => parts.filter((part) => part.kind === kind));
+  const others = parts
+    .filter((part) => !named.includes(part))
+    .reduce((sum, { quantity }) => sum + quantity, 0);
+  const texts = named.map(({ reference, text }) => together(`${reference} ${text}`));
+  const rows = row('build', [buildOf(specification), ...texts, together(`and ${others} more`)].join(', '));
+  if (rows.length <= mostPartLines) return rows;
+  return [...rows.slice(0, mostPartLines - 1), ...row('', `… ${parts.length} parts in all`)];
 }
 
 function buildOf(specification: Result['specification']): string {
@@ -127,7 +125,7 @@ function buildOf(specification: Result['specification']): string {
 function rampRows({ ramp, region }: Result): string[] {
   const inputs = region.inputVoltage_V;
   const ends = (values: readonly [number, number], unit: string) =>
-    inputs.map((input, end) => together(`${figure(values[end]!, unit)} at ${figure(input, 'V')}`)).join(', ');
+    inputs.map((input, end) => together(`${figure(values[end]!, unit)} at ${volts(input)}`)).join(', ');
   return [
     ...row('ramp', `${ends(ramp.comparatorSlope_V_per_s, 'V/s')}, at the comparator`),
     ...row('current', `${ends(ramp.current_A, 'A')}, into the timing capacitor`),

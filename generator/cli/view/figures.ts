@@ -22,3 +22,8 @@ export function figure(value: number | null, unit: string): string {
   if (unit === 'V/s') return minus(engineering(value / 1e6, 'V/µs'));
   return minus(engineering(value, unit === 'Ohm' ? 'Ω' : unit));
 }
+
+/** A voltage that somebody chose: `8 V`, not `8.00 V`. */
+export function volts(value: number): string {
+  return minus(`${Number(value.toPrecision(4))} V`);
+}

@@ -4,7 +4,7 @@ import { figure } from './figures.ts';
 import { row } from './table.ts';
 
 /** More would push the rest off the screen. */
-const mostRows = 4;
+const mostRows = 3;
 
 const words = { error: 'failed', warning: 'warning', note: 'note' } as const;
 

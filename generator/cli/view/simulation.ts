@@ -1,28 +1,20 @@
 import type { DeckCheck, Result, Simulation } from '../../emit/resultSchema.ts';
 import { printable } from '../problems/printable.ts';
 import type { Paint } from '../terminal/paint.ts';
-import { figure, percent, plainNumber } from './figures.ts';
+import { figure, percent, plainNumber, volts } from './figures.ts';
 import { row, together } from './table.ts';
 
 /** Whether the waveforms agree with the sizing, and where they come closest to the limit. */
 export function simulationRow(simulation: Simulation | null, paint: Paint): string[] {
   if (simulation === null) return row('simulation', 'not run');
   const { decks, passed, engine, version } = simulation;
-  const by = `${engine} engine ${version}`;
   const worst = worstOf(decks);
-  if (worst === null) return row('failed', `simulation: nothing was measured (${by})`, paint.bad);
-  if (passed) {
-    return row(
-      'simulation',
-      `agrees in ${decks.length} figures; nearest to its limit: ${deviation(worst)} (${by})`,
-    );
-  }
+  const by = `${engine} engine ${version}`;
+  if (worst === null) return row('failed', `simulation: nothing was measured; ${by}`, paint.bad);
+  const extent = `largest deviation ${deviation(worst)}; ${by}`;
+  if (passed) return row('simulation', `agrees in ${decks.length} figures; ${extent}`);
   const failed = decks.filter((check) => !check.passed).length;
-  return row(
-    'failed',
-    `simulation: ${failed} of ${decks.length} figures; worst: ${deviation(worst)} (${by})`,
-    paint.bad,
-  );
+  return row('failed', `simulation: ${failed} of ${decks.length} figures disagree; ${extent}`, paint.bad);
 }
 
 /** Every figure that was measured; a failed line starts with the word. */
@@ -37,19 +29,18 @@ export function simulationView(
   return `${[...head, ...checks, ...simulationRow(simulation, paint)].join('\n')}\n`;
 }
 
-function checkText(check: DeckCheck): string {
-  const { file, predicted, measured, unit, at } = check;
-  const where = `${figure(at.inputVoltage_V, 'V')}${at.outputVoltage_V === null ? '' : ` to ${figure(at.outputVoltage_V, 'V')}`}`;
+function checkText({ file, quantity, predicted, measured, unit, at }: DeckCheck): string {
+  const output = at.outputVoltage_V === null ? '' : `, ${volts(at.outputVoltage_V)} out`;
+  const where = together(`${volts(at.inputVoltage_V)} in${output}`);
   const values = `${figure(measured, unit)} measured, ${figure(predicted, unit)} predicted`;
-  return `${file} ${check.quantity} at ${together(where)}: ${together(values)}`;
+  return `${file} ${quantity} at ${where}: ${together(values)}`;
 }
 
-function deviation(check: DeckCheck): string {
-  const { errorRatio, limit, quantity, file, unit } = check;
+function deviation({ errorRatio, limit, quantity, file, unit }: DeckCheck): string {
   // What has no unit is compared by plain difference: near zero a ratio would mean nothing.
   const amount = unit === '' || unit === '1' ? plainNumber : percent;
-  const error = errorRatio === null ? 'no figure' : amount(errorRatio);
-  return `${quantity} in ${file} ${together(`off by ${error}, limit ${amount(limit)}`)}`;
+  const extent = errorRatio === null ? 'not to be told' : amount(errorRatio);
+  return `${together(`${extent} (limit ${amount(limit)})`)}, ${quantity} in ${file}`;
 }
 
 function worstOf(decks: readonly DeckCheck[]): DeckCheck | null {
