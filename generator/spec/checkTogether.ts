@@ -3,8 +3,8 @@ import { type Entry, problemAt } from './entries/Entry.ts';
 import { ReadValues } from './forms/ReadValue.ts';
 import { publicName, specKey, specKeys } from './keys/specKeys.ts';
 import type { ValueReading } from './readValues.ts';
-import { wanted } from './values/dimensions.ts';
 import { displayed } from './values/ValueFault.ts';
+import { wanted } from './values/ValueForm.ts';
 import { writeSpan } from './values/writeSpan.ts';
 
 type Entries = ReadonlyMap<string, Entry>;
@@ -15,7 +15,7 @@ export function missingKeys(entries: Entries, document: Place | null): readonly 
     .filter((key) => key.required === true && !entries.has(key.path))
     .map((key) => {
       const place = document ?? { path: key.flag!, line: null, column: null };
-      const expected = `${key.path}: ${key.form.kind === 'value' ? wanted(key.form.dimension) : key.example}`;
+      const expected = `${key.path}: ${key.form.kind === 'value' ? wanted({ ...key.form, example: key.example }) : key.example}`;
       const fix = `write ${key.path}: ${key.example}, or pass ${key.flag} "${key.example}"`;
       return problemAt(key.path, place, { code: 'key-missing', expected, received: 'nothing', fix });
     });
@@ -78,7 +78,7 @@ function needing(entries: Entries, path: string, others: readonly string[]): rea
     problemAt(path, entry.place, {
       code: 'key-missing',
       expected: `${path} with ${needed}`,
-      received: path,
+      received: `${path} alone`,
       fix,
     }),
   ];

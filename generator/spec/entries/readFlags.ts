@@ -2,7 +2,7 @@ import type { Place, Problem } from '../../base/Problem.ts';
 import { membersOf, specKey, specKeys } from '../keys/specKeys.ts';
 import { displayed, type ValueFault } from '../values/ValueFault.ts';
 import { type Entry, problemAt } from './Entry.ts';
-import { keyFault, kindFault } from './keyFaults.ts';
+import { keyFault } from './keyFaults.ts';
 
 export interface GivenFlag {
   /** `--vin` */
@@ -48,7 +48,7 @@ function setEntry(text: string): Entry | Problem {
     membersOf(name.slice(0, Math.max(dot, 0))) === undefined ? '' : name.slice(0, Math.max(dot, 0));
   const fault =
     membersOf(name) === undefined ? keyFault(group, name.slice(group === '' ? 0 : dot + 1), 'dotted') : null;
-  return problemAt(name, flagPlace('--set'), fault ?? kindFault(name, displayed(text.slice(cut + 1))));
+  return problemAt(name, flagPlace('--set'), fault ?? setGroup(name, text.slice(cut + 1)));
 }
 
 function entry(path: string, flag: string, text: string): Entry {
@@ -66,6 +66,14 @@ function setForm(text: string): ValueFault {
     received: displayed(text),
     fix: 'write --set "input=8 V to 36 V"',
   };
+}
+
+/** A group has no value; its keys are set one by one. */
+function setGroup(name: string, text: string): ValueFault {
+  const members = membersOf(name)!.map((member) => `${name}.${member}`);
+  const example = members.map(specKey).find((key) => key !== undefined)?.example ?? '…';
+  const fix = `write --set "${members[0]}=${example}"`;
+  return { code: 'wrong-kind', expected: `one of ${members.join(', ')}`, received: displayed(text), fix };
 }
 
 function givenTwice(earlier: Entry, entry: Entry): ValueFault {

@@ -36,7 +36,10 @@ export function readOne(text: string, key: SpecKey, context: FormContext): Readi
   const form = key.form;
   switch (form.kind) {
     case 'value':
-      return mapped(readSpan(text, signed(form, context)), (span) => ({ kind: 'spans', spans: [span] }));
+      return mapped(readSpan(text, valueForm(key, form, context)), (span) => ({
+        kind: 'spans',
+        spans: [span],
+      }));
     case 'gain':
       return mapped(readGain(text, context.law), (number) => ({ kind: 'number', number }));
     case 'choice':
@@ -54,11 +57,10 @@ function mapped<T>(reading: Reading<T>, value: (from: T) => ReadValue): Reading<
   return reading.ok ? read(value(reading.value)) : reading;
 }
 
-/** Only the output is a list, and only its sign depends on the converter. */
-function signed(form: ValueKeyForm, { converter }: FormContext): ValueForm {
-  return form.list === true && (converter === null || inverting.includes(converter))
-    ? { ...form, negative: true }
-    : form;
+/** Faults show the key's own example; only the output is a list, and only its sign depends on the converter. */
+function valueForm(key: SpecKey, form: ValueKeyForm, { converter }: FormContext): ValueForm {
+  const mayInvert = form.list === true && (converter === null || inverting.includes(converter));
+  return { ...form, example: key.example, ...(mayInvert ? { negative: true } : {}) };
 }
 
 function readList(
@@ -72,7 +74,7 @@ function readList(
   const spans: ReadSpan[] = [];
   const problems: Problem[] = [];
   for (const { text, place } of items) {
-    const reading = readSpan(text, signed(form, context));
+    const reading = readSpan(text, valueForm(key, form, context));
     if (reading.ok) spans.push(reading.value);
     else problems.push(problemAt(key.path, place, mended(reading.fault, key)));
   }

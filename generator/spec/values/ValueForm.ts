@@ -12,6 +12,19 @@ export interface ValueForm {
   readonly negative?: boolean;
   /** Narrower or wider than the dimension's own bounds, SI. */
   readonly bounds?: readonly [number, number];
+  /** What to show as wanted; left out: the dimension's own example. */
+  readonly example?: string;
+}
+
+export function exampleOf({ dimension, example }: ValueForm): string {
+  return example ?? dimensions[dimension].example;
+}
+
+/** `a voltage, such as 12 V` */
+export function wanted(form: ValueForm): string {
+  const { noun } = dimensions[form.dimension];
+  const unit = form.dimension === 'number' ? ' without a unit' : '';
+  return `${noun}${unit}, such as ${exampleOf(form)}`;
 }
 
 export function isWithinBounds(value: number, form: ValueForm): boolean {
@@ -33,8 +46,8 @@ export function wouldFit(digits: string, unitText: string, form: ValueForm): boo
 
 /** The unit that a bare number most likely lacks: the customary one, or SI where only that gives a sane value. */
 export function likelyUnit(digits: string, form: ValueForm): string {
-  const { example, symbol } = dimensions[form.dimension];
-  const customary = example.replace(/^[\d.]+ ?/, '');
+  const { symbol } = dimensions[form.dimension];
+  const customary = /^[\d.]+ ?([A-Za-z%/]*)/.exec(exampleOf(form))?.[1] ?? '';
   if (form.dimension === 'gain') return customary;
   return !wouldFit(digits, customary, form) && wouldFit(digits, symbol, form) ? symbol : customary;
 }

@@ -1,11 +1,10 @@
 import { exactly, type Quantity, spanOf } from '../../base/Quantity.ts';
-import { wanted } from './dimensions.ts';
 import { type End, unitOf } from './readEnd.ts';
 import type { ReadSpan } from './readSpan.ts';
 import { splitTolerance } from './splitRange.ts';
 import { applyTolerance, exactTolerance, type Tolerance, tooWide } from './tolerance.ts';
 import { type Reading, read, refuse } from './ValueFault.ts';
-import type { ValueForm } from './ValueForm.ts';
+import { type ValueForm, wanted } from './ValueForm.ts';
 
 /** One or two ends put together: order, signs, and tolerances shared. */
 export function assembleSpan(text: string, ends: readonly End[], form: ValueForm): Reading<ReadSpan> {
@@ -47,7 +46,7 @@ function toleranceFault(
 ): Reading<never> | null {
   const given = ends.some((end) => end.tolerance !== null);
   if (given && form.tolerance !== true) {
-    const expected = `${wanted(form.dimension)}, without a tolerance`;
+    const expected = `${wanted(form)}, without a tolerance`;
     return refuse('tolerance-not-allowed', expected, text, 'drop the tolerance');
   }
   const wide = ends.some((end, index) => given && tooWide(end.value, tolerances[index]!));

@@ -54,9 +54,3 @@ function dimension(
 ): Dimension {
   return { noun, unit, symbol, example, written: { unit, places: 0 }, least, most };
 }
-
-/** `a voltage, such as 12 V` */
-export function wanted(name: DimensionName): string {
-  const { noun, example } = dimensions[name];
-  return name === 'number' ? `${noun} without a unit, such as ${example}` : `${noun}, such as ${example}`;
-}

@@ -1,24 +1,24 @@
-import { dimensions, wanted } from './dimensions.ts';
+import { dimensions } from './dimensions.ts';
 import { codedValue } from './iec60062.ts';
 import type { Literal } from './Literal.ts';
 import { otherCases } from './units.ts';
 import { type Reading, refuse } from './ValueFault.ts';
-import { boundsOf, likelyUnit, type ValueForm, wouldFit } from './ValueForm.ts';
+import { boundsOf, exampleOf, likelyUnit, type ValueForm, wanted, wouldFit } from './ValueForm.ts';
 import { valueText } from './valueText.ts';
 
 /** No unit, a unit in the wrong case, or none that is known. */
 export function unitFault(text: string, literal: Literal, form: ValueForm): Reading<never> {
-  const { example, noun } = dimensions[form.dimension];
+  const { noun } = dimensions[form.dimension];
   const usual = likelyUnit(literal.digits, form);
   if (literal.unit === '') {
     const remedy = `give the unit: ${literal.negative ? '-' : ''}${literal.digits} ${usual}`;
-    return refuse('unit-missing', `${noun} with its unit, such as ${example}`, text, remedy);
+    return refuse('unit-missing', `${noun} with its unit, such as ${exampleOf(form)}`, text, remedy);
   }
   if (!/^[A-Za-z%/ ]+$/.test(literal.unit)) return codeFault(text, form) ?? notANumber(text, form);
   const cases = otherCases(literal.unit);
   const meant = cases.find((unit) => wouldFit(literal.digits, unit, form)) ?? cases[0];
   if (meant !== undefined) return caseFault(text, literal, meant, form);
-  return refuse('unit-unknown', wanted(form.dimension), text, unitRemedy(literal, usual, form));
+  return refuse('unit-unknown', wanted(form), text, unitRemedy(literal, usual, form));
 }
 
 /** `4.7k` lacks the unit's name, not the prefix. */
@@ -36,21 +36,21 @@ function codeFault(text: string, form: ValueForm): Reading<never> | null {
   if (!resistance && codedValue(code, 'capacitance') === null) return null;
   const own = form.dimension === 'gain' ? 'resistance' : form.dimension;
   if (own === (resistance ? 'resistance' : 'capacitance') && rest.length > 0) {
-    return refuse('unit-unknown', wanted(form.dimension), text, `write the code without a unit: ${code}`);
+    return refuse('unit-unknown', wanted(form), text, `write the code without a unit: ${code}`);
   }
   const kind = resistance ? 'a resistance' : 'a capacitance';
-  const remedy = `write ${dimensions[form.dimension].example}; this is the value code of ${kind}`;
-  return refuse('wrong-dimension', wanted(form.dimension), text, remedy);
+  const remedy = `write ${exampleOf(form)}; this is the value code of ${kind}`;
+  return refuse('wrong-dimension', wanted(form), text, remedy);
 }
 
 export function caseFault(text: string, literal: Literal, unit: string, form: ValueForm): Reading<never> {
   const remedy = `write ${literal.digits} ${unit}: case matters, m is milli, M is mega`;
-  return refuse('unit-case', wanted(form.dimension), text, remedy);
+  return refuse('unit-case', wanted(form), text, remedy);
 }
 
 export function zeroFault(text: string, form: ValueForm): Reading<never> {
-  const { noun, example } = dimensions[form.dimension];
-  return refuse('zero', `${noun} above zero`, text, `write ${noun} above zero, such as ${example}`);
+  const { noun } = dimensions[form.dimension];
+  return refuse('zero', `${noun} above zero`, text, `write ${noun} above zero, such as ${exampleOf(form)}`);
 }
 
 /** Out of bounds: most often a prefix in the wrong case, or per cent without its sign. */
@@ -67,5 +67,5 @@ export function magnitudeFault(text: string, literal: Literal | null, form: Valu
 }
 
 export function notANumber(text: string, form: ValueForm): Reading<never> {
-  return refuse('number-form', wanted(form.dimension), text, `write ${dimensions[form.dimension].example}`);
+  return refuse('number-form', wanted(form), text, `write ${exampleOf(form)}`);
 }

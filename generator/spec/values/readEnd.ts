@@ -45,12 +45,7 @@ function closeHyphen(text: string, form: ValueForm): Reading<never> | null {
   const hyphen = /^([\d.]+ ?[A-Za-z%/]*) ?-([\d.]+ ?[A-Za-z%/]*)$/.exec(text);
   if (hyphen !== null && !hyphen[2]!.includes('%')) {
     const range = asRange([hyphen[1]!, hyphen[2]!], form);
-    return refuse(
-      'range-form',
-      `a range written with "to": ${rangeExample(form.dimension)}`,
-      text,
-      `write ${range}`,
-    );
+    return refuse('range-form', `a range written with "to": ${rangeExample(form)}`, text, `write ${range}`);
   }
   if (oneSided === null) return null;
   const [, body, sign, amount] = oneSided;

@@ -1,10 +1,10 @@
-import { dimensions, wanted } from './dimensions.ts';
+import { dimensions } from './dimensions.ts';
 import { codedValue } from './iec60062.ts';
 import { decimalValue, type Literal, parseLiteral } from './Literal.ts';
 import { magnitudeFault, notANumber, unitFault, zeroFault } from './magnitudeFaults.ts';
 import { parseUnit, type Unit } from './units.ts';
 import { type Reading, read, refuse } from './ValueFault.ts';
-import { isWithinBounds, type ValueForm } from './ValueForm.ts';
+import { isWithinBounds, type ValueForm, wanted } from './ValueForm.ts';
 
 export interface Magnitude {
   /** SI, never negative. */
@@ -26,8 +26,7 @@ export function readMagnitude(text: string, unitOfRange: string, form: ValueForm
   if (unit === null) return readCode(text, form) ?? unitFault(text, literal, form);
   if (!fitsDimension(unit, form)) return wrongDimension(text, unit, form);
   const value = decimalValue(literal.digits, unit.places);
-  if (!Number.isFinite(value))
-    return refuse('not-finite', wanted(form.dimension), text, 'write a finite value');
+  if (!Number.isFinite(value)) return refuse('not-finite', wanted(form), text, 'write a finite value');
   return bounded(text, { value, negative: literal.negative, toleranceRatio: null }, literal, form);
 }
 
@@ -45,7 +44,7 @@ function wrongDimension(text: string, unit: Unit, form: ValueForm): Reading<neve
   const known = Object.values(dimensions).find((dimension) => dimension.symbol === unit.symbol);
   const is = known?.noun ?? (unit.symbol === 'W' ? 'a power' : 'something else');
   const remedy = si === '' ? 'write it without that unit' : `give ${noun} in ${si}`;
-  return refuse('wrong-dimension', wanted(form.dimension), text, `${remedy}; this is ${is}`);
+  return refuse('wrong-dimension', wanted(form), text, `${remedy}; this is ${is}`);
 }
 
 /** A value code where one is meant; null where the text is none. */

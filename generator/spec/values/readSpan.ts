@@ -1,12 +1,11 @@
 import type { Span } from '../../base/Quantity.ts';
 import { assembleSpan } from './assembleSpan.ts';
-import { wanted } from './dimensions.ts';
 import { normaliseText } from './normaliseText.ts';
 import { type End, readEnd, unitOf } from './readEnd.ts';
 import { asRange, rangeExample, screenForm } from './screenForm.ts';
 import { splitRange } from './splitRange.ts';
 import { displayed, type Reading, refuse } from './ValueFault.ts';
-import type { ValueForm } from './ValueForm.ts';
+import { type ValueForm, wanted } from './ValueForm.ts';
 
 export interface ReadSpan {
   readonly span: Span;
@@ -33,15 +32,10 @@ function readNormalised(text: string, form: ValueForm): Reading<ReadSpan> {
   const texts = splitRange(text);
   if (texts.length > 2) {
     const remedy = `write ${asRange([texts[0]!, texts.at(-1)!], form)}`;
-    return refuse('range-form', `a range with two ends: ${rangeExample(form.dimension)}`, text, remedy);
+    return refuse('range-form', `a range with two ends: ${rangeExample(form)}`, text, remedy);
   }
   if (texts.length === 2 && form.range !== true) {
-    return refuse(
-      'range-not-allowed',
-      `one value: ${wanted(form.dimension)}`,
-      text,
-      'give one value, perhaps with ±',
-    );
+    return refuse('range-not-allowed', `one value: ${wanted(form)}`, text, 'give one value, perhaps with ±');
   }
   return readEnds(text, texts, form);
 }

@@ -1,25 +1,24 @@
-import { type DimensionName, dimensions, wanted } from './dimensions.ts';
+import { dimensions } from './dimensions.ts';
 import { type Reading, read, refuse } from './ValueFault.ts';
-import { likelyUnit, type ValueForm } from './ValueForm.ts';
+import { exampleOf, likelyUnit, type ValueForm, wanted } from './ValueForm.ts';
 
 /** No value needs more; the patterns of this folder stay quick on what is shorter. */
 const longestValue = 200;
 
 /** Refuses what is no number in any locale that the grammar knows, before it is taken apart. */
 export function screenForm(text: string, form: ValueForm): Reading<string> {
-  const name = form.dimension;
-  if (text === '') return refuse('value-missing', wanted(name), text, `write ${dimensions[name].example}`);
-  if (text.length > longestValue) return refuse('value-too-long', wanted(name), text, 'write the value only');
+  if (text === '') return refuse('value-missing', wanted(form), text, `write ${exampleOf(form)}`);
+  if (text.length > longestValue) return refuse('value-too-long', wanted(form), text, 'write the value only');
   if (/(?<![A-Za-z])(nan|inf|infinity)(?![A-Za-z])|∞/i.test(text)) {
     return refuse(
       'not-finite',
-      `a finite value: ${wanted(name)}`,
+      `a finite value: ${wanted(form)}`,
       text,
       'write a number, or leave the key out',
     );
   }
   if (/\.{2,}|…|~/.test(text)) {
-    const range = `a range written with "to": ${rangeExample(name)}`;
+    const range = `a range written with "to": ${rangeExample(form)}`;
     return refuse('range-form', range, text, `write ${asRange(text.split(/ ?(?:\.{2,}|…|~) ?/), form)}`);
   }
   return screenSeparators(text);
@@ -44,10 +43,11 @@ function ungrouped(text: string): string {
   return /\d\.\d+[.,]\d/.test(text) ? 'write the digits together, with one decimal point' : `write ${joined}`;
 }
 
-export function rangeExample(name: DimensionName): string {
-  if (name === 'voltage') return '8 V to 36 V';
-  const { example } = dimensions[name];
-  return `${example} to ${example.replace(/^\d+/, (digits) => String(2 * Number(digits)))}`;
+export function rangeExample(form: ValueForm): string {
+  const example = exampleOf(form);
+  if (example.includes(' to ')) return example;
+  const { example: single } = dimensions[form.dimension];
+  return `${single} to ${single.replace(/^\d+/, (digits) => String(2 * Number(digits)))}`;
 }
 
 /** The ends as a range in the wanted form; a unit is added where none was given. */
