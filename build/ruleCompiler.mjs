@@ -71,7 +71,7 @@ export function ruleDeckVite() {
     name: 'rule-deck',
     enforce: 'pre',
     async transform(text, id) {
-      if (!id.split('?')[0].endsWith('.xml')) return null;
+      if (!id.endsWith('.xml')) return null;
       const compiled = await compileDeck(text, id);
       if (compiled.ok) return { code: compiled.value, map: null };
       const complaints = compiled.problems.map(inWords);

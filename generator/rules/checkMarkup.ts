@@ -1,6 +1,6 @@
+import { nearest } from '../base/nearest.ts';
 import type { DeckFaults } from './DeckFaults.ts';
 import { deckFormat, type ElementFormat, type ElementName, editorAttributes } from './deckFormat.ts';
-import { nearestName } from './nearestName.ts';
 import type { XmlElement } from './readXml.ts';
 
 /** Refuses every element and attribute that the format does not have, with the nearest that it has. */
@@ -34,7 +34,7 @@ function checkElement(element: XmlElement, name: ElementName, faults: DeckFaults
 }
 
 function refuseElement(element: XmlElement, known: readonly string[], faults: DeckFaults): void {
-  const near = nearestName(element.name, known);
+  const near = nearest(element.name, known);
   const fix = near === null ? 'Remove it.' : `Did you mean ${near}?`;
   faults.add(element.start, element.name, {
     code: 'unknown-element',
@@ -50,7 +50,7 @@ function refuseAttribute(
   known: readonly string[],
   faults: DeckFaults,
 ): void {
-  const near = nearestName(attribute, known);
+  const near = nearest(attribute, known);
   const fix = near === null ? 'Remove it.' : `Did you mean ${near}?`;
   faults.add(faults.attributeAt(element, attribute), `${element.name}.${attribute}`, {
     code: 'unknown-attribute',

@@ -1,6 +1,6 @@
 import type { RuleOutcome } from '../emit/resultSchema.ts';
 import type { DesignQuantities } from './quantities.ts';
-import type { Comparison, Rule, Scope } from './RuleDeck.ts';
+import type { Comparison, ExampleOutcome, Rule, Scope } from './RuleDeck.ts';
 
 /**
  * Applies rules to a design, in the order of the deck.
@@ -33,6 +33,12 @@ export function judge(rule: Rule, scope: Scope): RuleOutcome {
     reason: rule.reason,
     source: rule.source,
   };
+}
+
+/** What a rule comes to over given quantities, as its examples put it. */
+export function outcomeOf(rule: Rule, scope: Scope): ExampleOutcome {
+  if (!appliesTo(rule, scope)) return 'not-applicable';
+  return judge(rule, scope).passed ? 'passes' : 'fails';
 }
 
 function compare(left: number, comparison: Comparison, right: number): boolean {

@@ -1,9 +1,9 @@
 import type { ConstantNode, FunctionNode, MathNode, OperatorNode, SymbolNode } from 'mathjs';
 import { parse } from 'mathjs';
+import { nearest } from '../base/nearest.ts';
 import { dimensionless, type UnitScale, unitScale } from './Dimension.ts';
 import type { Arithmetic, Expression, ExpressionFault, FunctionName } from './Expression.ts';
 import { functionNames } from './Expression.ts';
-import { nearestName } from './nearestName.ts';
 import { isQuantityName, quantities } from './quantities.ts';
 import type { Comparison } from './RuleDeck.ts';
 
@@ -123,7 +123,7 @@ class Gate {
     const scale = unitScale(name);
     if (scale !== null)
       return { kind: 'number', value: Number(`1e${scale.decade}`), dimension: scale.dimension };
-    const near = nearestName(name, Object.keys(quantities));
+    const near = nearest(name, Object.keys(quantities));
     const fix = near === null ? '`rules explain` lists the quantities.' : `Did you mean ${near}?`;
     this.#faults.push(
       fault('unknown-quantity', this.#offsetOf(name), 'a quantity of the design or a unit', name, fix),

@@ -1,8 +1,8 @@
+import { nearest } from '../base/nearest.ts';
 import { dimensionOfQuantity, typeOf } from './checkDimensions.ts';
 import { dimensionInWords, sameDimension } from './Dimension.ts';
 import { type Expression, type ExpressionFault, quantitiesIn } from './Expression.ts';
 import { numberOf } from './evaluateExpression.ts';
-import { nearestName } from './nearestName.ts';
 import { parseExpression } from './parseExpression.ts';
 import { isQuantityName, quantities } from './quantities.ts';
 
@@ -37,7 +37,7 @@ function readAssignment(
   if (equals < 0) {
     add('example-form', 'quantity = value', piece.trim().slice(0, 40), 'Separate several with semicolons.');
   } else if (!isQuantityName(name)) {
-    const near = nearestName(name, Object.keys(quantities));
+    const near = nearest(name, Object.keys(quantities));
     const fix = near === null ? 'Name a quantity of the design.' : `Did you mean ${near}?`;
     add('unknown-quantity', 'a quantity of the design', name, fix);
   } else if (values.has(name)) {

@@ -1,3 +1,4 @@
+import { nearest } from '../base/nearest.ts';
 import type { Severity } from '../base/Problem.ts';
 import { typeOf } from './checkDimensions.ts';
 import type { DeckFaults, ElementText } from './DeckFaults.ts';
@@ -11,7 +12,6 @@ import {
   severities,
 } from './deckFormat.ts';
 import { type ComparisonExpression, type Expression, quantitiesIn } from './Expression.ts';
-import { nearestName } from './nearestName.ts';
 import { parseExpression } from './parseExpression.ts';
 import { quantities } from './quantities.ts';
 import type { ExampleOutcome, RuleExample } from './RuleDeck.ts';
@@ -101,7 +101,7 @@ function readChoice<T extends string>(
   const value = element.attributes.get(attribute);
   const chosen = choices.find((choice) => choice === value);
   if (chosen !== undefined) return chosen;
-  const near = value === undefined ? null : nearestName(value, choices);
+  const near = value === undefined ? null : nearest(value, choices);
   return faults.add(faults.attributeAt(element, attribute), `${key}.${attribute}`, {
     code: value === undefined ? 'missing-attribute' : 'unknown-value',
     expected: `${attribute}: ${choices.join(', ')}`,

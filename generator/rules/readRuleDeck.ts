@@ -2,8 +2,8 @@ import { failure, type Outcome, success } from '../base/Problem.ts';
 import { checkMarkup } from './checkMarkup.ts';
 import { DeckFaults } from './DeckFaults.ts';
 import { numberOf, truthOf } from './evaluateExpression.ts';
-import { appliesTo, judge } from './evaluateRules.ts';
-import type { ExampleOutcome, Rule, Scope } from './RuleDeck.ts';
+import { outcomeOf } from './evaluateRules.ts';
+import type { Rule } from './RuleDeck.ts';
 import { type CheckedRule, readRule } from './readRule.ts';
 import { readXml } from './readXml.ts';
 
@@ -65,11 +65,6 @@ function checkExamples(rule: CheckedRule, faults: DeckFaults): void {
     const complaint = { code: 'example-contradicts', expected: example.outcome, received: outcome };
     faults.add(rule.start, `${rule.id}.example`, { ...complaint, fix: 'Mend the rule or the example.' });
   }
-}
-
-export function outcomeOf(rule: Rule, scope: Scope): ExampleOutcome {
-  if (!appliesTo(rule, scope)) return 'not-applicable';
-  return judge(rule, scope).passed ? 'passes' : 'fails';
 }
 
 /** The rule with functions that walk its expressions: no code is generated at run time. */
