@@ -1,6 +1,7 @@
 import { isBuiltin } from 'node:module';
 import { join } from 'node:path';
 import { build } from 'esbuild';
+import { builtDataEsbuild } from './builtData.mjs';
 import { ruleDeckEsbuild } from './ruleCompiler.mjs';
 import { templateEsbuild } from './templateCompiler.mjs';
 
@@ -12,7 +13,7 @@ const shared = {
   logLevel: 'warning',
   // Large, and loaded for few tasks: they stay packages of their own.
   external: ['eecircuit-engine', 'mathjs'],
-  plugins: [templateEsbuild(), ruleDeckEsbuild()],
+  plugins: [templateEsbuild(), ruleDeckEsbuild(), builtDataEsbuild()],
 };
 
 /**

@@ -66,10 +66,16 @@ function pipelineFault(file, target, typeOnly) {
   // Templates and rule decks are data.
   if (target.startsWith('../templates/') || target.startsWith('../rules/')) return null;
   if (typeOnly && openToTypes.includes(target)) return null;
-  const [own, other] = [file, target].map((path) => stages.indexOf(path.split('/')[0]));
+  const [own, other] = [file, target].map((path) => stages.indexOf(stageOf(path)));
   if (own === -1) return `${file} belongs to no stage of the pipeline`;
   if (other === -1) return `${target} belongs to no stage of the pipeline`;
   return other <= own ? null : `${stages[own]} imports the later stage ${stages[other]}: ${target}`;
+}
+
+/** Modules at the root, but the library's index, are chapters of the table of contents. */
+function stageOf(path) {
+  const [first, inside] = path.split('/');
+  return inside === undefined && first !== 'index.ts' ? 'design.ts' : first;
 }
 
 function nodeFault(file, specifier) {
