@@ -1,6 +1,6 @@
 import { failure, type Outcome, success } from '../base/Problem.ts';
 import type { Law } from '../law/Law.ts';
-import { comparedLaws, lawOf } from '../law/laws.ts';
+import { laws } from '../law/laws.ts';
 import { type GainSpread, indexExtremes, type LeastGain, leastGain } from '../law/leastGain.ts';
 import { type LoopCorners, loopCorners } from '../law/loopCorners.ts';
 import { demandOf } from '../ramp/demandOf.ts';
@@ -21,11 +21,11 @@ export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
   const { inductance } = specification;
   if (inductance?.kind !== 'value') return failure([inductanceMissing(request)]);
 
-  const region = buildRegion(request, powerStageOf(specification.converter)!);
+  const region = buildRegion(request, powerStageOf(specification));
   if (!region.ok) return region;
   const corners = loopCorners(specification, inductance);
   const goal = specification.goal.dampingIndex;
-  const law = lawOf(specification.ramp.law)!;
+  const law = laws[specification.ramp.law];
   const required = leastGain(law, region.value, corners, goal);
 
   if (required.gain === 0 && specification.ramp.gain === null)
@@ -36,7 +36,7 @@ export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
   const { spread, senseSlope_per_s, wantedSlope_per_s } = sizing.value;
   const sized = (of: Law, least: LeastGain, gain: number, realisedGain: number) =>
     sizedLaw(of, least, gain, realisedGain, region.value, corners, spread);
-  const other = law.kind === 'fixed' ? comparedLaws.adaptive : comparedLaws.fixed;
+  const other = law.kind === 'fixed' ? laws.vin : laws.fixed;
   const otherLeast = leastGain(other, region.value, corners, goal);
   const otherGain = otherLeast.gain / spread.low;
   return success({

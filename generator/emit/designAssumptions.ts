@@ -51,7 +51,7 @@ export function designAssumptions(design: SizedDesign): readonly Assumption[] {
 function indexWith(design: SizedDesign, at: RegionPoint, inductanceShare: number): number {
   const { chosen, corners, sizing } = design;
   const scale = corners.lambda.low * sizing.spread.low * inductanceShare;
-  return dampingIndex(at.up_V, at.swing_V, scale * chosen.realisedGain * chosen.law.basis_V(at));
+  return dampingIndex(at.up_V, at.swing_V, scale * chosen.law.ramp_V(chosen.realisedGain, at));
 }
 
 /** The same point with more duty, the swing as it was. */

@@ -72,7 +72,7 @@ function lawFigures({ chosen, corners, region, request }: SizedDesign): Result['
     inputVoltage_V,
     outputVoltage_V: output?.high ?? null,
     value:
-      (chosen.realisedGain * chosen.law.basis_V({ ...region.vertices[0]!, inputVoltage_V })) /
+      chosen.law.ramp_V(chosen.realisedGain, { ...region.vertices[0]!, inputVoltage_V }) /
       corners.referenceInductance_H,
   });
   return {

@@ -1,4 +1,6 @@
+import type { Interval } from '../base/Quantity.ts';
 import type { OperatingRegion, RegionPoint } from '../region/OperatingRegion.ts';
+import { pointsAtDuty } from '../region/pointsAtDuty.ts';
 import { dampingIndex } from './innerLoop.ts';
 import type { Law } from './Law.ts';
 import type { LoopCorners } from './loopCorners.ts';
@@ -13,17 +15,30 @@ export interface LeastGain {
 /**
  * The least gain for which x ≥ goal over the whole region and every corner.
  *
- *   gain = (x_goal·U − up − internal)/(λ·basis)
+ *   ma·L needed = (x_goal·U − up − internal − free)/λ
  *
- * linear-fractional in the point, hence greatest at a vertex; the unit with the least λ needs the most.
+ * greatest at a vertex; the unit with the least λ needs the most. Infinite where the law has no ramp to
+ * give at a point that needs one (`vout` at no output voltage).
  */
 export function leastGain(law: Law, region: OperatingRegion, corners: LoopCorners, goal: number): LeastGain {
-  const needs = region.vertices.map((at) => ({
-    at,
-    gain: (goal * at.swing_V - at.up_V - corners.internalRamp_V.low) / (corners.lambda.low * law.basis_V(at)),
-  }));
-  const worst = needs.reduce((a, b) => (b.gain > a.gain ? b : a));
-  return { gain: Math.max(0, worst.gain), at: worst.at };
+  const needs = region.vertices.map((at) => {
+    const ramp_V = (goal * at.swing_V - at.up_V - ownRamp_V(region, corners, at).low) / corners.lambda.low;
+    return { at, ramp_V, gain: ramp_V > needless * at.swing_V ? law.gainFor(ramp_V, at) : 0 };
+  });
+  const worst = needs.reduce((a, b) => (b.gain > a.gain || (a.gain === 0 && b.ramp_V > a.ramp_V) ? b : a));
+  return { gain: worst.gain, at: worst.at };
+}
+
+/** Share of the swing below which a need is rounding. */
+const needless = 1e-12;
+
+/** Compensation that is there without the ramp: the controller's own, and the magnetizing current's [V]. */
+export function ownRamp_V({ stage }: OperatingRegion, corners: LoopCorners, at: RegionPoint): Interval {
+  const free_V = stage.freeRamp_V(at);
+  return {
+    low: corners.internalRamp_V.low + free_V * corners.magnetizingShare.low,
+    high: corners.internalRamp_V.high + free_V * corners.magnetizingShare.high,
+  };
 }
 
 /** Spread of the ramp against its nominal gain: ratios of low and high to nominal. */
@@ -50,18 +65,25 @@ export function indexExtremes(
   corners: LoopCorners,
   spread: GainSpread,
 ): IndexExtremes {
-  const indexAt = (at: RegionPoint, scale: number, internal_V: number): IndexExtreme => ({
-    at,
-    dampingIndex: dampingIndex(at.up_V, at.swing_V, scale * gain * law.basis_V(at) + internal_V),
-  });
-  const low = region.vertices.map((at) =>
-    indexAt(at, corners.lambda.low * spread.low, corners.internalRamp_V.low),
+  const points = [...region.vertices, ...clampPoints(law, gain, region)];
+  const low = points.map((at) =>
+    indexAt(law, gain, at, corners.lambda.low * spread.low, ownRamp_V(region, corners, at).low),
   );
-  const high = region.vertices.map((at) =>
-    indexAt(at, corners.lambda.high * spread.high, corners.internalRamp_V.high),
+  const high = points.map((at) =>
+    indexAt(law, gain, at, corners.lambda.high * spread.high, ownRamp_V(region, corners, at).high),
   );
   return {
     min: low.reduce((a, b) => (b.dampingIndex < a.dampingIndex ? b : a)),
     max: high.reduce((a, b) => (b.dampingIndex > a.dampingIndex ? b : a)),
   };
+}
+
+function indexAt(law: Law, gain: number, at: RegionPoint, scale: number, own_V: number): IndexExtreme {
+  return { at, dampingIndex: dampingIndex(at.up_V, at.swing_V, scale * law.ramp_V(gain, at) + own_V) };
+}
+
+/** Where the law clamps inside the region: x has a kink there, and may be least or greatest. */
+function clampPoints(law: Law, gain: number, region: OperatingRegion): RegionPoint[] {
+  const offDuty = law.clampOffDuty(gain);
+  return offDuty === null ? [] : pointsAtDuty(region, 1 - offDuty);
 }

@@ -17,6 +17,8 @@ export interface LoopCorners {
   readonly lambda: Interval;
   /** Equivalent ma·L of a ramp that the controller already adds [V], least and greatest. */
   readonly internalRamp_V: Interval;
+  /** L/Lm, least and greatest: what the magnetizing current adds; 0 without a transformer. */
+  readonly magnetizingShare: Interval;
 }
 
 export function loopCorners(specification: Specification, inductance: ValueInductance): LoopCorners {
@@ -24,8 +26,13 @@ export function loopCorners(specification: Specification, inductance: ValueInduc
   const referenceInductance_H = inductance.value_H.from.nominal;
   const inductance_H = inductanceInterval(inductance);
   const internal = specification.controller?.internalRamp_V_per_s;
+  const magnetizing = specification.magnetizingInductance_H;
   return {
     referenceInductance_H,
+    magnetizingShare: {
+      low: magnetizing === null ? 0 : inductance_H.low / magnetizing.to.high,
+      high: magnetizing === null ? 0 : inductance_H.high / magnetizing.from.low,
+    },
     inductance_H,
     senseGain_V_per_A,
     lambda: {

@@ -26,10 +26,20 @@ export interface InductorVoltages {
  * What a converter is to its inner current loop.
  *
  * Everything else follows: m1 = up/L, m2 = down/L, D = down/(up + down), and the swing U = up + down.
- * `inductorVoltages` has to be linear in the operating point: the extremes of the damping index are
- * then at the vertices of the region, which is how they are found.
  */
 export interface PowerStage {
   readonly kind: ConverterKind;
+  /**
+   * Linear in the voltages where losses do not count: the extremes of the damping index are then at the
+   * vertices of the region. With losses the duty falls with the input, rises with the output and with
+   * the load, which keeps them there.
+   */
   inductorVoltages(point: OperatingPoint, drops: StageDrops): InductorVoltages;
+  /** Mean inductor current over load current at a duty. */
+  currentRatio(duty: number): number;
+  /**
+   * Inductor-referred voltage that makes the magnetizing current rise [V], 0 without a transformer in the
+   * sensed path: the compensation that comes free is this over the magnetizing inductance.
+   */
+  freeRamp_V(point: OperatingPoint): number;
 }

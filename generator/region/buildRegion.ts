@@ -3,6 +3,7 @@ import { type Interval, outerInterval } from '../base/Quantity.ts';
 import type { ReadSpecification } from '../spec/readSpecification.ts';
 import type { Specification } from '../spec/Specification.ts';
 import { clipBox, type HalfSpace } from './clipBox.ts';
+import { dutyExcess_V, outputAtDuty } from './dutyInverse.ts';
 import { impossibleRegion } from './impossibleRegion.ts';
 import { type OperatingRegion, type RegionPoint, regionPoint } from './OperatingRegion.ts';
 import type { PowerStage, StageDrops } from './PowerStage.ts';
@@ -46,7 +47,7 @@ function verticesFor(
   const loadCurrent_A = specification.load_A ? outerInterval(specification.load_A) : { low: 0, high: 0 };
   const inputVoltage_V = outerInterval(specification.input_V);
   return dropCorners(specification).flatMap((drops) => {
-    const outputVoltage_V = output ?? everyOutput(stage, drops, inputVoltage_V, loadCurrent_A);
+    const outputVoltage_V = output ?? everyOutput(specification, stage, drops, inputVoltage_V, loadCurrent_A);
     const limits = dutyLimits(specification, stage, drops);
     return clipBox({ inputVoltage_V, outputVoltage_V, loadCurrent_A }, limits).map((point) =>
       regionPoint(stage, point, drops, outputIndex),
@@ -54,28 +55,27 @@ function verticesFor(
   });
 }
 
-/**
- * Output voltages wide enough to hold every duty from nothing to one.
- *
- * The low end is negative with drops: at duty 0 the falling slope is that of the drops alone.
- */
-function everyOutput(stage: PowerStage, drops: StageDrops, input: Interval, load: Interval): Interval {
-  const idle = { inputVoltage_V: input.high, outputVoltage_V: 0, loadCurrent_A: load.high };
-  return { low: -stage.inductorVoltages(idle, drops).down_V, high: input.high };
+/** Output voltages that hold every duty that the controller can make, at any input and load. */
+function everyOutput(
+  specification: Specification,
+  stage: PowerStage,
+  drops: StageDrops,
+  input: Interval,
+  load: Interval,
+): Interval {
+  const least = { inputVoltage_V: input.low, outputVoltage_V: 0, loadCurrent_A: load.high };
+  const most = { inputVoltage_V: input.high, outputVoltage_V: 0, loadCurrent_A: load.low };
+  return {
+    low: outputAtDuty(stage, least, drops, leastDuty(specification)),
+    high: outputAtDuty(stage, most, drops, specification.maximumDutyRatio),
+  };
 }
 
 function dutyLimits(specification: Specification, stage: PowerStage, drops: StageDrops): HalfSpace[] {
-  const voltages = (point: Parameters<HalfSpace>[0]) => stage.inductorVoltages(point, drops);
   const least = leastDuty(specification);
   return [
-    (point) => {
-      const { up_V, down_V } = voltages(point);
-      return down_V - specification.maximumDutyRatio * (up_V + down_V);
-    },
-    (point) => {
-      const { up_V, down_V } = voltages(point);
-      return least * (up_V + down_V) - down_V;
-    },
+    (point) => dutyExcess_V(stage, point, drops, specification.maximumDutyRatio),
+    (point) => -dutyExcess_V(stage, point, drops, least),
   ];
 }
 

@@ -1,7 +1,8 @@
+import { bisect } from '../base/bisect.ts';
 import type { Interval } from '../base/Quantity.ts';
 import type { OperatingPoint } from './PowerStage.ts';
 
-/** A half-space: the points where `excess` is not positive; linear in the operating point. */
+/** The points where a function is not positive; it is monotone along each axis, linear without losses. */
 export type HalfSpace = (point: OperatingPoint) => number;
 
 export interface Box {
@@ -43,12 +44,17 @@ function edges(corners: readonly OperatingPoint[]): Edge[] {
 }
 
 function crossing([a, b]: Edge, plane: HalfSpace): OperatingPoint[] {
-  const fa = plane(a);
-  const fb = plane(b);
+  const [fa, fb] = [plane(a), plane(b)];
   if (fa > 0 === fb > 0 || fa === fb) return [];
-  const t = fa / (fa - fb);
-  const at = (axis: (typeof axes)[number]) => a[axis] + t * (b[axis] - a[axis]);
-  return [{ inputVoltage_V: at(axes[0]), outputVoltage_V: at(axes[1]), loadCurrent_A: at(axes[2]) }];
+  const point = (t: number): OperatingPoint => {
+    const at = (axis: (typeof axes)[number]) => a[axis] + t * (b[axis] - a[axis]);
+    return { inputVoltage_V: at(axes[0]), outputVoltage_V: at(axes[1]), loadCurrent_A: at(axes[2]) };
+  };
+  // Straight without losses; where it is not, the secant only comes near.
+  const secant = fa / (fa - fb);
+  if (Math.abs(plane(point(secant))) <= 1e-12 * Math.abs(fa - fb)) return [point(secant)];
+  const sign = fa > 0 ? -1 : 1;
+  return [point(bisect((t) => sign * plane(point(t)), 0, 1))];
 }
 
 /** A crossing lies on its own plane up to rounding. */

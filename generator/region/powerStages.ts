@@ -1,10 +1,24 @@
-import type { ConverterKind } from '../spec/Specification.ts';
+import type { ConverterKind, Specification } from '../spec/Specification.ts';
+import { boost } from './converters/boost.ts';
 import { buck } from './converters/buck.ts';
+import { buckBoost, cuk, sepic } from './converters/buckBoost.ts';
+import { flyback } from './converters/flyback.ts';
+import { forward } from './converters/forward.ts';
 import type { PowerStage } from './PowerStage.ts';
 
-/** Every converter that can be sized: one file each, listed here. */
-const powerStages: Partial<Record<ConverterKind, PowerStage>> = { buck };
+type StageParameters = Pick<Specification, 'turnsRatio' | 'stage'>;
 
-export function powerStageOf(kind: ConverterKind): PowerStage | null {
-  return powerStages[kind] ?? null;
+/** Every converter: one file each, listed here. */
+const powerStages: Record<ConverterKind, (parameters: StageParameters) => PowerStage> = {
+  buck: () => buck,
+  boost: () => boost,
+  'buck-boost': () => buckBoost,
+  sepic: () => sepic,
+  cuk: () => cuk,
+  flyback: ({ turnsRatio }) => flyback(turnsRatio.nominal),
+  forward: ({ turnsRatio, stage }) => forward(turnsRatio.nominal, stage ?? 'single'),
+};
+
+export function powerStageOf(specification: Specification): PowerStage {
+  return powerStages[specification.converter](specification);
 }

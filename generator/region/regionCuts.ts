@@ -1,6 +1,7 @@
 import { outerInterval } from '../base/Quantity.ts';
 import type { Specification } from '../spec/Specification.ts';
 import { leastDuty } from './buildRegion.ts';
+import { inputAtDuty } from './dutyInverse.ts';
 import type { RegionCut } from './OperatingRegion.ts';
 import type { PowerStage } from './PowerStage.ts';
 import { nominalDrops } from './stageDrops.ts';
@@ -26,7 +27,7 @@ type Ends = readonly [number, number];
 function dropoutCut(specification: Specification, stage: PowerStage, output: Ends): RegionCut[] {
   const limitDuty = specification.maximumDutyRatio;
   const input = outerInterval(specification.input_V);
-  const needed = inputAtDuty(specification, stage, output[1], limitDuty);
+  const needed = neededInput(specification, stage, output[1], limitDuty);
   if (needed <= input.low * (1 + 1e-9)) return [];
   return [
     {
@@ -42,31 +43,28 @@ function dropoutCut(specification: Specification, stage: PowerStage, output: End
 function skippingCut(specification: Specification, stage: PowerStage, output: Ends): RegionCut[] {
   const limitDuty = leastDuty(specification);
   const input = outerInterval(specification.input_V);
-  if (limitDuty === 0) return [];
-  const needed = inputAtDuty(specification, stage, output[0], limitDuty);
+  const needed = neededInput(specification, stage, output[0], limitDuty);
   if (needed >= input.high * (1 - 1e-9)) return [];
   return [
     {
-      reason: 'minimum on-time',
+      reason: limitDuty > 0 ? 'minimum on-time' : 'input above the output',
       inputVoltage_V: [Math.max(needed, input.low), input.high],
       outputVoltage_V: output,
       limitDuty,
-      peakCurrent_A: skippingPeak(specification, stage, input.high, output[0]),
+      peakCurrent_A: limitDuty === 0 ? null : skippingPeak(specification, stage, input.high, output[0]),
     },
   ];
 }
 
-/** Input voltage at which an output needs a duty; linear in Vin, so two points of the line find it. */
-function inputAtDuty(specification: Specification, stage: PowerStage, output: number, duty: number): number {
-  const excess = (inputVoltage_V: number) => {
-    const { up_V, down_V } = stage.inductorVoltages(
-      { inputVoltage_V, outputVoltage_V: output, loadCurrent_A: specification.load_A?.to.nominal ?? 0 },
-      nominalDrops(specification),
-    );
-    return down_V - duty * (up_V + down_V);
-  };
-  const atZero = excess(0);
-  return atZero / (atZero - excess(1));
+function neededInput(
+  specification: Specification,
+  stage: PowerStage,
+  outputVoltage_V: number,
+  duty: number,
+): number {
+  const loadCurrent_A = specification.load_A?.to.nominal ?? 0;
+  const point = { inputVoltage_V: 1, outputVoltage_V, loadCurrent_A };
+  return inputAtDuty(stage, point, nominalDrops(specification), duty);
 }
 
 /** Load plus half of the ripple that the least on-time leaves; half of the ripple only, twice, without a load. */
@@ -83,6 +81,7 @@ function skippingPeak(
     { inputVoltage_V, outputVoltage_V, loadCurrent_A: load ?? 0 },
     nominalDrops(specification),
   );
+  const carried = load === null ? null : load * stage.currentRatio(leastDuty(specification));
   const rise = (up_V / inductance.value_H.from.low) * specification.minimumOnTime_s.high;
-  return load === null ? rise : load + rise / 2;
+  return carried === null ? rise : carried + rise / 2;
 }

@@ -39,7 +39,7 @@ export function converterDeck(
   const timing = clockTiming(design);
   const inductance_H = design.corners.referenceInductance_H;
   const source = trackSource(design, kind, sized.realisedGain);
-  const ramp_V = sized.realisedGain * sized.law.basis_V(point);
+  const ramp_V = sized.law.ramp_V(sized.realisedGain, point);
   const index = dampingIndex(point.up_V, point.swing_V, ramp_V);
   const ratio = cycleRatio(index);
   const ripple_A = (point.up_V / inductance_H) * point.duty * timing.period_s;

@@ -17,4 +17,6 @@ export const buck: PowerStage = {
         point.outputVoltage_V + drops.rectifierDrop_V + current * (drops.rectifier_ohm + drops.winding_ohm),
     };
   },
+  currentRatio: () => 1,
+  freeRamp_V: () => 0,
 };
