@@ -1,6 +1,6 @@
 import type { Law } from '../law/Law.ts';
 import type { IndexExtremes, LeastGain } from '../law/leastGain.ts';
-import type { LoopCorners } from '../law/loopCorners.ts';
+import type { KnownCorners } from '../law/loopCorners.ts';
 import type { RampDemand } from '../ramp/RampDemand.ts';
 import type { OperatingRegion } from '../region/OperatingRegion.ts';
 import type { ReadSpecification } from '../spec/readSpecification.ts';
@@ -22,7 +22,7 @@ export interface SizedLaw {
 export interface SizedDesign {
   readonly request: ReadSpecification;
   readonly region: OperatingRegion;
-  readonly corners: LoopCorners;
+  readonly corners: KnownCorners;
   /** The law that is built. */
   readonly chosen: SizedLaw;
   /** The law that it is compared with, by the same block fed from the other voltage. */

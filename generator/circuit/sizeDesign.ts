@@ -2,7 +2,7 @@ import { failure, type Outcome, success } from '../base/Problem.ts';
 import type { Law } from '../law/Law.ts';
 import { laws } from '../law/laws.ts';
 import { type GainSpread, indexExtremes, type LeastGain, leastGain } from '../law/leastGain.ts';
-import { type LoopCorners, loopCorners } from '../law/loopCorners.ts';
+import { hasInductance, type LoopCorners, loopCorners } from '../law/loopCorners.ts';
 import { demandOf } from '../ramp/demandOf.ts';
 import { buildRegion } from '../region/buildRegion.ts';
 import type { OperatingRegion } from '../region/OperatingRegion.ts';
@@ -18,12 +18,11 @@ export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
   const { specification } = request;
   const ready = refuseGaps(request);
   if (!ready.ok) return ready;
-  const { inductance } = specification;
-  if (inductance?.kind !== 'value') return failure([inductanceMissing(request)]);
 
   const region = buildRegion(request, powerStageOf(specification));
   if (!region.ok) return region;
-  const corners = loopCorners(specification, inductance);
+  const corners = loopCorners(specification, region.value);
+  if (!hasInductance(corners)) return failure([inductanceMissing(request)]);
   const goal = specification.goal.dampingIndex;
   const law = laws[specification.ramp.law];
   const required = leastGain(law, region.value, corners, goal);

@@ -50,7 +50,7 @@ export function designAssumptions(design: SizedDesign): readonly Assumption[] {
 /** Damping index of the worst unit at a point with its ramp scaled by what the inductance leaves. */
 function indexWith(design: SizedDesign, at: RegionPoint, inductanceShare: number): number {
   const { chosen, corners, sizing } = design;
-  const scale = corners.lambda.low * sizing.spread.low * inductanceShare;
+  const scale = corners.at(at).lambda.low * sizing.spread.low * inductanceShare;
   return dampingIndex(at.up_V, at.swing_V, scale * chosen.law.ramp_V(chosen.realisedGain, at));
 }
 

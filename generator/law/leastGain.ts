@@ -1,4 +1,5 @@
 import type { Interval } from '../base/Quantity.ts';
+import { type Extreme, extremesOver } from '../region/extremesOver.ts';
 import type { OperatingRegion, RegionPoint } from '../region/OperatingRegion.ts';
 import { pointsAtDuty } from '../region/pointsAtDuty.ts';
 import { dampingIndex } from './innerLoop.ts';
@@ -17,16 +18,27 @@ export interface LeastGain {
  *
  *   ma·L needed = (x_goal·U − up − internal − free)/λ
  *
- * greatest at a vertex; the unit with the least λ needs the most. Infinite where the law has no ramp to
- * give at a point that needs one (`vout` at no output voltage).
+ * greatest at a vertex where the corners are the same everywhere; the unit with the least λ needs the most.
+ * Infinite where the law has no ramp to give at a point that needs one (`vout` at no output voltage).
  */
 export function leastGain(law: Law, region: OperatingRegion, corners: LoopCorners, goal: number): LeastGain {
-  const needs = region.vertices.map((at) => {
-    const ramp_V = (goal * at.swing_V - at.up_V - ownRamp_V(region, corners, at).low) / corners.lambda.low;
-    return { at, ramp_V, gain: ramp_V > needless * at.swing_V ? law.gainFor(ramp_V, at) : 0 };
-  });
-  const worst = needs.reduce((a, b) => (b.gain > a.gain || (a.gain === 0 && b.ramp_V > a.ramp_V) ? b : a));
-  return { gain: worst.gain, at: worst.at };
+  const need_V = (at: RegionPoint) =>
+    (goal * at.swing_V - at.up_V - ownRamp_V(region, corners, at).low) / corners.at(at).lambda.low;
+  const gain = (at: RegionPoint) => {
+    const ramp_V = need_V(at);
+    return ramp_V > needless * at.swing_V ? law.gainFor(ramp_V, at) : 0;
+  };
+  const worst = most(region, corners, gain);
+  return worst.value > 0
+    ? { gain: worst.value, at: worst.at }
+    : { gain: 0, at: most(region, corners, need_V).at };
+}
+
+/** Greatest value over a region; at the vertices where the corners do not depend on the point. */
+function most(region: OperatingRegion, corners: LoopCorners, figure: (at: RegionPoint) => number): Extreme {
+  if (!corners.isUniform) return extremesOver(region, figure).max;
+  const found = region.vertices.map((at) => ({ at, value: figure(at) }));
+  return found.reduce((a, b) => (b.value > a.value ? b : a));
 }
 
 /** Share of the swing below which a need is rounding. */
@@ -34,10 +46,11 @@ const needless = 1e-12;
 
 /** Compensation that is there without the ramp: the controller's own, and the magnetizing current's [V]. */
 export function ownRamp_V({ stage }: OperatingRegion, corners: LoopCorners, at: RegionPoint): Interval {
+  const { internalRamp_V, magnetizingShare } = corners.at(at);
   const free_V = stage.freeRamp_V(at);
   return {
-    low: corners.internalRamp_V.low + free_V * corners.magnetizingShare.low,
-    high: corners.internalRamp_V.high + free_V * corners.magnetizingShare.high,
+    low: internalRamp_V.low + free_V * magnetizingShare.low,
+    high: internalRamp_V.high + free_V * magnetizingShare.high,
   };
 }
 
@@ -65,21 +78,25 @@ export function indexExtremes(
   corners: LoopCorners,
   spread: GainSpread,
 ): IndexExtremes {
-  const points = [...region.vertices, ...clampPoints(law, gain, region)];
-  const low = points.map((at) =>
-    indexAt(law, gain, at, corners.lambda.low * spread.low, ownRamp_V(region, corners, at).low),
-  );
-  const high = points.map((at) =>
-    indexAt(law, gain, at, corners.lambda.high * spread.high, ownRamp_V(region, corners, at).high),
-  );
+  const low = (at: RegionPoint) =>
+    indexAt(law, gain, at, corners.at(at).lambda.low * spread.low, ownRamp_V(region, corners, at).low);
+  const high = (at: RegionPoint) =>
+    indexAt(law, gain, at, corners.at(at).lambda.high * spread.high, ownRamp_V(region, corners, at).high);
+  const kinks = clampPoints(law, gain, region);
+  const candidates = (figure: (at: RegionPoint) => number) => [
+    ...kinks.map((at) => ({ at, value: figure(at) })),
+    most(region, corners, figure),
+  ];
+  const max = candidates(high).reduce((a, b) => (b.value > a.value ? b : a));
+  const min = candidates((at) => -low(at)).reduce((a, b) => (b.value > a.value ? b : a));
   return {
-    min: low.reduce((a, b) => (b.dampingIndex < a.dampingIndex ? b : a)),
-    max: high.reduce((a, b) => (b.dampingIndex > a.dampingIndex ? b : a)),
+    min: { at: min.at, dampingIndex: -min.value },
+    max: { at: max.at, dampingIndex: max.value },
   };
 }
 
-function indexAt(law: Law, gain: number, at: RegionPoint, scale: number, own_V: number): IndexExtreme {
-  return { at, dampingIndex: dampingIndex(at.up_V, at.swing_V, scale * law.ramp_V(gain, at) + own_V) };
+function indexAt(law: Law, gain: number, at: RegionPoint, scale: number, own_V: number): number {
+  return dampingIndex(at.up_V, at.swing_V, scale * law.ramp_V(gain, at) + own_V);
 }
 
 /** Where the law clamps inside the region: x has a kink there, and may be least or greatest. */

@@ -1,5 +1,5 @@
 import { outerInterval } from '../base/Quantity.ts';
-import type { LoopCorners } from '../law/loopCorners.ts';
+import type { KnownCorners } from '../law/loopCorners.ts';
 import type { Specification } from '../spec/Specification.ts';
 import type { RampDemand } from './RampDemand.ts';
 
@@ -17,7 +17,7 @@ export const rampReference = { voltage_V: 2.5, toleranceRatio: 0.01 } as const;
  */
 export function demandOf(
   specification: Specification,
-  corners: LoopCorners,
+  corners: KnownCorners,
   requiredGain: number,
 ): RampDemand {
   const { frequency_Hz, maximumDutyRatio, ramp } = specification;

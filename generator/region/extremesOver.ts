@@ -1,0 +1,91 @@
+import { type OperatingRegion, type RegionPoint, regionPoint } from './OperatingRegion.ts';
+import type { OperatingPoint } from './PowerStage.ts';
+
+export interface Extreme {
+  readonly value: number;
+  readonly at: RegionPoint;
+}
+
+export interface Extremes {
+  readonly min: Extreme;
+  readonly max: Extreme;
+}
+
+/** Stretches into which a line is cut to bracket its extremes. */
+const stretches = 16;
+const goldenRatio = (Math.sqrt(5) - 1) / 2;
+
+/**
+ * Least and greatest value over a region of a figure that is monotone in input and output, each for itself,
+ * except along its border.
+ *
+ * Looked for at the vertices and, by golden section inside a bracket, along every line between two of them:
+ * where a figure has no vertices to be extreme at (products such as ma·D), its border is where it is.
+ */
+export function extremesOver(region: OperatingRegion, figure: (point: RegionPoint) => number): Extremes {
+  const found: Extreme[] = region.vertices.map((at) => ({ at, value: figure(at) }));
+  for (const [a, b] of lines(region.vertices)) {
+    const at = (t: number) => pointBetween(region, a, b, t);
+    found.push(...stationary((t) => figure(at(t))).map((t) => ({ at: at(t), value: figure(at(t)) })));
+  }
+  return {
+    min: found.reduce((a, b) => (b.value < a.value ? b : a)),
+    max: found.reduce((a, b) => (b.value > a.value ? b : a)),
+  };
+}
+
+/** Pairs of vertices of the same output and drops. */
+function lines(vertices: readonly RegionPoint[]): (readonly [RegionPoint, RegionPoint])[] {
+  return vertices.flatMap((a, index) =>
+    vertices
+      .slice(index + 1)
+      .filter((b) => a.outputIndex === b.outputIndex && a.drops === b.drops)
+      .map((b) => [a, b] as const),
+  );
+}
+
+/** The point at a share of the way between two of one output and the same drops. */
+export function pointBetween(
+  { stage }: OperatingRegion,
+  a: RegionPoint,
+  b: RegionPoint,
+  t: number,
+): RegionPoint {
+  const mix = (pick: (point: OperatingPoint) => number) => pick(a) + t * (pick(b) - pick(a));
+  const point = {
+    inputVoltage_V: mix((p) => p.inputVoltage_V),
+    outputVoltage_V: mix((p) => p.outputVoltage_V),
+    loadCurrent_A: mix((p) => p.loadCurrent_A),
+  };
+  return regionPoint(stage, point, a.drops, a.outputIndex);
+}
+
+/** Where a function of 0 to 1 is stationary inside, as far as the stretches resolve it. */
+function stationary(value: (t: number) => number): number[] {
+  const samples = Array.from({ length: stretches + 1 }, (_, index) => value(index / stretches));
+  return samples.slice(1, -1).flatMap((sample, index) => {
+    const [before, after] = [samples[index]!, samples[index + 2]!];
+    const sign = sample > before && sample > after ? 1 : sample < before && sample < after ? -1 : 0;
+    if (sign === 0) return [];
+    return [goldenSection((t) => sign * value(t), index / stretches, (index + 2) / stretches)];
+  });
+}
+
+/** Where a function with one maximum between two ends has it. */
+function goldenSection(value: (t: number) => number, from: number, to: number): number {
+  let [low, high] = [from, to];
+  let [left, right] = [high - goldenRatio * (high - low), low + goldenRatio * (high - low)];
+  let [atLeft, atRight] = [value(left), value(right)];
+  for (let step = 0; step < 60; step += 1) {
+    if (atLeft >= atRight) {
+      [high, right, atRight] = [right, left, atLeft];
+      left = high - goldenRatio * (high - low);
+      atLeft = value(left);
+    } else {
+      [low, left, atLeft] = [left, right, atRight];
+      right = low + goldenRatio * (high - low);
+      atRight = value(right);
+    }
+  }
+  return (low + high) / 2;
+}
