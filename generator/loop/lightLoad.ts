@@ -1,0 +1,76 @@
+import { engineering } from '../base/engineering.ts';
+import type { KnownCorners } from '../law/loopCorners.ts';
+import { extremesOver } from '../region/extremesOver.ts';
+import type { OperatingRegion, RegionPoint } from '../region/OperatingRegion.ts';
+import type { Specification } from '../spec/Specification.ts';
+
+/** Where conduction stops being continuous, and what that means for the figures. */
+export interface LightLoad {
+  /** Load at the border to discontinuous conduction over the region, nominal inductance [A]. */
+  readonly borderLoad_A: { readonly low: number; readonly high: number };
+  /** Whether the load range reaches below it; null where the load is not known. */
+  readonly reached: boolean | null;
+  /** What it means, in sentences. */
+  readonly notes: readonly string[];
+}
+
+/** Output over input above which a discontinuous buck without a ramp is unstable at low frequency. */
+export const discontinuousStabilityRatio = 2 / 3;
+
+/**
+ * Border load ΔI/2 carried to the output: Iload = ½·m1·D·T/(Imean/Iload).
+ */
+export function lightLoad(
+  specification: Specification,
+  region: OperatingRegion,
+  corners: KnownCorners,
+  period_s: number,
+): LightLoad {
+  const border = (point: RegionPoint) =>
+    ((point.up_V / corners.referenceInductance_H) * point.duty * period_s) /
+    2 /
+    region.stage.currentRatio(point.duty);
+  const { min, max } = extremesOver(region, border);
+  const least = specification.load_A?.from.low ?? null;
+  const reached = least === null ? null : least < max.value;
+  return {
+    borderLoad_A: { low: min.value, high: max.value },
+    reached,
+    notes: [...borderNotes(least, max.value), ...buckNotes(region, reached)],
+  };
+}
+
+function borderNotes(least_A: number | null, border_A: number): string[] {
+  if (least_A === null)
+    return [
+      `The load is not known: below ${engineering(border_A, 'A')} conduction may be discontinuous, and the damping figures then do not apply.`,
+    ];
+  if (least_A >= border_A) return ['Conduction is continuous over the whole load range.'];
+  return [
+    `Below ${engineering(border_A, 'A')} conduction becomes discontinuous: the current starts from zero in each cycle, a perturbation does not reach the next one, and the damping figures do not apply.`,
+  ];
+}
+
+function buckNotes(region: OperatingRegion, reached: boolean | null): string[] {
+  if (region.stage.kind !== 'buck' || reached === false) return [];
+  const ratio = extremesOver(region, (point) => point.outputVoltage_V / point.inputVoltage_V).max.value;
+  if (ratio <= discontinuousStabilityRatio) return [];
+  return [
+    `A buck without a ramp has a low-frequency instability there above Vout/Vin = 2/3; a ramp of ${leastDiscontinuousRamp.toPrecision(2)} of the down slope cures it at every ratio, and every law here gives more where it is needed.`,
+  ];
+}
+
+/**
+ * Least ramp, as a share of the down slope, with which a buck in discontinuous conduction is stable at low
+ * frequency for every ratio of output to input: 3/2 − √2 = 0.0858.
+ *
+ * With M = Vout/Vin, μ = ma/m2 and constant control the load current is I ∝ m1/(M·(m1 + ma)²). On a resistive
+ * load the slow pole is in the right half-plane where d(ln I)/d(ln M) > 1, ma held:
+ *
+ *   (3 − μ)·M² − (5 − 2μ)·M + 2 < 0
+ *
+ * Its roots are 2/3 and 1 at μ = 0, and meet at μ = 3/2 − √2.
+ * @source Erickson & Maksimović, Fundamentals of Power Electronics, discontinuous mode: 2/3 and 0.086 (from
+ *   memory); derived again as above
+ */
+export const leastDiscontinuousRamp = 1.5 - Math.SQRT2;
