@@ -22,9 +22,11 @@ const shared = {
  * CommonJS, for a script takes a code cache and a graph of ES modules none. ASCII, so that it is read
  * without decoding. What is imported dynamically starts when it is first asked for.
  */
-export function bundleCommand(root, folder) {
+export function bundleCommand(root, folder, { write = true } = {}) {
   return build({
     ...shared,
+    write,
+    absWorkingDir: root,
     entryPoints: { cli: join(root, 'generator/cli/entry.ts') },
     outdir: folder,
     outExtension: { '.js': '.cjs' },
@@ -41,9 +43,11 @@ export function bundleCommand(root, folder) {
 }
 
 /** The library as ES modules; what needs Node lies in chunks that only `main` asks for. */
-export function bundleLibrary(root, folder) {
+export function bundleLibrary(root, folder, { write = true } = {}) {
   return build({
     ...shared,
+    write,
+    absWorkingDir: root,
     entryPoints: { index: join(root, 'generator/index.ts') },
     outdir: folder,
     format: 'esm',
