@@ -1,5 +1,6 @@
 import { isBuiltin } from 'node:module';
 import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
 import { build } from 'esbuild';
 import { builtDataEsbuild } from './builtData.mjs';
 import { ruleDeckEsbuild } from './ruleCompiler.mjs';
@@ -13,7 +14,7 @@ const shared = {
   logLevel: 'warning',
   // Large, and loaded for few tasks: they stay packages of their own.
   external: ['eecircuit-engine', 'mathjs'],
-  plugins: [templateEsbuild(), ruleDeckEsbuild(), builtDataEsbuild()],
+  plugins: [templateEsbuild(), ruleDeckEsbuild(), builtDataEsbuild(), leanYargs()],
 };
 
 /**
@@ -37,8 +38,8 @@ export function bundleCommand(root, folder, { write = true } = {}) {
     minifySyntax: true,
     banner: { js: '(function(require,__filename,__dirname){var module={exports:{}};' },
     footer: { js: '})' },
-    // Read by yargs alone, which looks for its own folder: any absolute file URL does.
-    define: { 'import.meta.url': '"file:///"' },
+    // Read in ES modules only: see workerLocation.ts.
+    define: { 'import.meta.url': '""' },
   });
 }
 
@@ -71,6 +72,18 @@ function nodeAtRunTime() {
       onLoad({ filter: /.*/, namespace: 'node' }, ({ path }) => ({
         contents: `module.exports = globalThis.process?.getBuiltinModule?.(${JSON.stringify(path)}) ?? {};`,
         loader: 'js',
+      }));
+    },
+  };
+}
+
+/** yargs on our own platform in place of its usual one. */
+export function leanYargs() {
+  return {
+    name: 'lean-yargs',
+    setup({ onResolve }) {
+      onResolve({ filter: /platform-shims\/esm\.mjs$/ }, () => ({
+        path: fileURLToPath(new URL('yargsPlatform.mjs', import.meta.url)),
       }));
     },
   };
