@@ -1,9 +1,9 @@
 import { spawnSync } from 'node:child_process';
-import { chmodSync, copyFileSync, mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import { chmodSync, copyFileSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { renderAnswers } from './answers.mjs';
-import { bundleCommand, bundleLibrary } from './bundles.mjs';
+import { bundleCommand, bundleLibrary, inAscii } from './bundles.mjs';
 import { finishTypes } from './libraryTypes.mjs';
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '..');
@@ -18,6 +18,8 @@ const representative = 'design|--vin|8 V to 36 V|--l|10 uH|--fs|500 kHz|--engine
 try {
   mkdirSync(folder, { recursive: true });
   await Promise.all([bundleCommand(root, folder), bundleLibrary(root, folder)]);
+  const script = join(folder, 'cli.cjs');
+  writeFileSync(script, inAscii(readFileSync(script, 'utf8')));
   placeWorker();
   placeLauncher();
   node('build/codeCache.cjs', folder, ...representative);
@@ -51,8 +53,7 @@ function node(script, ...words) {
     cwd: root,
     encoding: 'utf8',
   });
-  if (status !== 0 && !words.includes('design'))
-    throw new Error(`node ${script} ${words.join(' ')} ends ${status}\n${stdout}${stderr}`);
+  if (status !== 0) throw new Error(`node ${script} ${words.join(' ')} ends ${status}\n${stdout}${stderr}`);
 }
 
 function replace() {
