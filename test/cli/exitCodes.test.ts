@@ -2,7 +2,7 @@ import { appendFile, readdir, readFile, symlink, writeFile } from 'node:fs/promi
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { ended, figures, listensToSignals, newFolder, run, start } from './program.ts';
+import { figures, newFolder, run, runUntil } from './program.ts';
 
 const withoutEngine = ['--engine', 'none'];
 const specification = 'input: 8 V to 36 V\ninductance: 10 uH\nfrequency: 500 kHz\n';
@@ -149,20 +149,16 @@ describe('a signal', () => {
     ['SIGTERM', 143],
   ] as const)('%s during the simulation ends with %i and leaves no file', async (signal, code) => {
     const cwd = await newFolder();
-    const env = { TMPDIR: cwd };
-    const child = start(['design', ...figures, '--out', 'set'], { cwd, env });
-    const end = ended(child);
-    await listensToSignals(child);
-    child.kill(signal);
-    expect(await end).toEqual({ code, stdout: '', stderr: '' });
+    const argv = ['design', ...figures, '--out', 'set'];
+    expect(await runUntil(signal, argv, { cwd, env: { TMPDIR: cwd } })).toEqual({
+      code,
+      stdout: '',
+      stderr: '',
+    });
     expect(await readdir(cwd)).toEqual([]);
   });
 
   it('ends a wait for standard input', async () => {
-    const child = start(['design', '-']);
-    const end = ended(child);
-    await listensToSignals(child);
-    child.kill('SIGINT');
-    expect(await end).toEqual({ code: 130, stdout: '', stderr: '' });
+    expect(await runUntil('SIGINT', ['design', '-'])).toEqual({ code: 130, stdout: '', stderr: '' });
   });
 });

@@ -1,6 +1,6 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 import { existsSync } from 'node:fs';
-import { mkdtemp, readFile, realpath, rm } from 'node:fs/promises';
+import { mkdtemp, realpath, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout } from 'node:timers/promises';
@@ -59,14 +59,23 @@ export function ended(child: ChildProcess): Promise<Ended> {
   });
 }
 
-const sigint = 1n << 1n;
-
-/** Waits until the program has taken over SIGINT, as the kernel knows it; elsewhere a second must do. */
-export async function listensToSignals({ pid }: ChildProcess): Promise<void> {
-  if (process.platform !== 'linux') return setTimeout(1000);
-  for (;;) {
-    const caught = /^SigCgt:\s*(\w+)$/m.exec(await readFile(`/proc/${pid}/status`, 'utf8'))?.[1] ?? '0';
-    if ((BigInt(`0x${caught}`) & sigint) !== 0n) return;
-    await setTimeout(10);
+/**
+ * Runs the program, its standard input left open, and sends it a signal while it is at work.
+ *
+ * On a busy machine the first moment may come before the program listens: then the signal ends it as it would
+ * any process, without a code, and a later moment is tried.
+ */
+export async function runUntil(
+  signal: 'SIGINT' | 'SIGTERM',
+  argv: readonly string[],
+  circumstances: Circumstances = {},
+): Promise<Ended> {
+  for (let moment_ms = 300; ; moment_ms *= 2) {
+    const child = start(argv, circumstances);
+    const end = ended(child);
+    await setTimeout(moment_ms);
+    child.kill(signal);
+    const outcome = await end;
+    if (outcome.code !== null || moment_ms > 5000) return outcome;
   }
 }
