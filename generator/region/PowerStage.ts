@@ -26,8 +26,8 @@ export interface InductorVoltages {
  * What a converter is to its inner current loop.
  *
  * Everything else follows: m1 = up/L, m2 = down/L, D = down/(up + down), and the swing U = up + down.
- * `inductorVoltages` has to be linear in the operating point: the extremes of the damping index are
- * then at the vertices of the region, which is how they are found.
+ * `inductorVoltages` has to be linear in each voltage, current, drop and resistance: the extremes of the
+ * damping index are then at the vertices of the region, which is how they are found.
  */
 export interface PowerStage {
   readonly kind: ConverterKind;

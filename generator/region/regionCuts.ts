@@ -1,38 +1,42 @@
 import { outerInterval } from '../base/Quantity.ts';
 import type { Specification } from '../spec/Specification.ts';
 import { leastDuty } from './buildRegion.ts';
+import { boxCorners } from './clipBox.ts';
 import type { RegionCut } from './OperatingRegion.ts';
-import type { PowerStage } from './PowerStage.ts';
-import { nominalDrops } from './stageDrops.ts';
+import type { OperatingPoint, PowerStage, StageDrops } from './PowerStage.ts';
+import { dropsAt } from './stageDrops.ts';
+
+type Ends = readonly [number, number];
 
 /**
  * What the asked-for region loses to the maximum duty and to the minimum on-time, per output voltage.
  *
- * Both are stated at the end of the output range where they bite first, for a nominal unit at full load.
+ * Each as the least box of input and output that holds all that is lost, by the unit and load that lose
+ * most: with input and output on a line of constant duty, the corner of that box is kept.
  */
 export function regionCuts(specification: Specification, stage: PowerStage): readonly RegionCut[] {
-  if (specification.output_V === null) return [];
+  if (specification.output_V === null) return skippingAtAnyOutput(specification, stage);
   return specification.output_V.flatMap((span) => {
-    const output = outerInterval(span);
+    const { low, high } = outerInterval(span);
     return [
-      ...dropoutCut(specification, stage, [output.low, output.high]),
-      ...skippingCut(specification, stage, [output.low, output.high]),
+      ...dropoutCut(specification, stage, [low, high]),
+      ...skippingCut(specification, stage, [low, high]),
     ];
   });
 }
 
-type Ends = readonly [number, number];
-
 function dropoutCut(specification: Specification, stage: PowerStage, output: Ends): RegionCut[] {
   const limitDuty = specification.maximumDutyRatio;
   const input = outerInterval(specification.input_V);
-  const needed = inputAtDuty(specification, stage, output[1], limitDuty);
+  const units = conditions(specification).map((unit) => dutyLine(stage, unit, limitDuty));
+  const needed = Math.max(...units.map((line) => line.inputFor(output[1])));
   if (needed <= input.low * (1 + 1e-9)) return [];
+  const kept = Math.min(...units.map((line) => line.outputFrom(input.low)));
   return [
     {
       reason: 'maximum duty',
       inputVoltage_V: [input.low, Math.min(needed, input.high)],
-      outputVoltage_V: output,
+      outputVoltage_V: [Math.max(kept, output[0]), output[1]],
       limitDuty,
       peakCurrent_A: null,
     },
@@ -43,46 +47,88 @@ function skippingCut(specification: Specification, stage: PowerStage, output: En
   const limitDuty = leastDuty(specification);
   const input = outerInterval(specification.input_V);
   if (limitDuty === 0) return [];
-  const needed = inputAtDuty(specification, stage, output[0], limitDuty);
+  const units = conditions(specification).map((unit) => dutyLine(stage, unit, limitDuty));
+  const needed = Math.min(...units.map((line) => line.inputFor(output[0])));
   if (needed >= input.high * (1 - 1e-9)) return [];
+  const kept = Math.max(...units.map((line) => line.outputFrom(input.high)));
   return [
     {
       reason: 'minimum on-time',
       inputVoltage_V: [Math.max(needed, input.low), input.high],
-      outputVoltage_V: output,
+      outputVoltage_V: [output[0], Math.min(kept, output[1])],
       limitDuty,
       peakCurrent_A: skippingPeak(specification, stage, input.high, output[0]),
     },
   ];
 }
 
-/** Input voltage at which an output needs a duty; linear in Vin, so two points of the line find it. */
-function inputAtDuty(specification: Specification, stage: PowerStage, output: number, duty: number): number {
-  const excess = (inputVoltage_V: number) => {
-    const { up_V, down_V } = stage.inductorVoltages(
-      { inputVoltage_V, outputVoltage_V: output, loadCurrent_A: specification.load_A?.to.nominal ?? 0 },
-      nominalDrops(specification),
-    );
-    return down_V - duty * (up_V + down_V);
-  };
-  const atZero = excess(0);
-  return atZero / (atZero - excess(1));
+/** Where every duty is asked for, those below the least are lost at every input. */
+function skippingAtAnyOutput(specification: Specification, stage: PowerStage): RegionCut[] {
+  const limitDuty = leastDuty(specification);
+  if (limitDuty === 0) return [];
+  const { low, high } = outerInterval(specification.input_V);
+  return [
+    {
+      reason: 'minimum on-time',
+      inputVoltage_V: [low, high],
+      outputVoltage_V: null,
+      limitDuty,
+      peakCurrent_A: skippingPeak(specification, stage, high, 0),
+    },
+  ];
 }
 
-/** Load plus half of the ripple that the least on-time leaves; half of the ripple only, twice, without a load. */
+interface Conditions {
+  readonly loadCurrent_A: number;
+  readonly drops: StageDrops;
+}
+
+/** Every end of load and drops. */
+function conditions(specification: Specification): Conditions[] {
+  const { load_A, rectifierDrop_V } = specification;
+  const load = load_A ? outerInterval(load_A) : { low: 0, high: 0 };
+  return boxCorners([load, rectifierDrop_V, { low: 0, high: 1 }]).map(([loadCurrent_A, drop_V, share]) => ({
+    loadCurrent_A: loadCurrent_A!,
+    drops: dropsAt(specification, drop_V!, share!),
+  }));
+}
+
+/** Inputs and outputs that meet at one duty; a line, so two of its points find the others. */
+function dutyLine(stage: PowerStage, { loadCurrent_A, drops }: Conditions, duty: number) {
+  const excess = (point: Omit<OperatingPoint, 'loadCurrent_A'>) => {
+    const { up_V, down_V } = stage.inductorVoltages({ ...point, loadCurrent_A }, drops);
+    return down_V - duty * (up_V + down_V);
+  };
+  return {
+    inputFor: (outputVoltage_V: number) =>
+      rootOf((inputVoltage_V) => excess({ inputVoltage_V, outputVoltage_V })),
+    outputFrom: (inputVoltage_V: number) =>
+      rootOf((outputVoltage_V) => excess({ inputVoltage_V, outputVoltage_V })),
+  };
+}
+
+function rootOf(line: (value: number) => number): number {
+  const atZero = line(0);
+  return atZero / (atZero - line(1));
+}
+
+/**
+ * Largest peak where pulses are skipped: load plus half of the rise in the least on-time, or from zero the
+ * whole rise, whichever is more; at the steepest rise.
+ */
 function skippingPeak(
   specification: Specification,
   stage: PowerStage,
   inputVoltage_V: number,
   outputVoltage_V: number,
 ): number | null {
-  const inductance = specification.inductance;
+  const { inductance, load_A, minimumOnTime_s } = specification;
   if (inductance?.kind !== 'value') return null;
-  const load = specification.load_A?.to.nominal ?? null;
-  const { up_V } = stage.inductorVoltages(
-    { inputVoltage_V, outputVoltage_V, loadCurrent_A: load ?? 0 },
-    nominalDrops(specification),
-  );
-  const rise = (up_V / inductance.value_H.from.low) * specification.minimumOnTime_s.high;
-  return load === null ? rise : load + rise / 2;
+  const least_H = Math.min(inductance.value_H.from.low, inductance.atPeakLimit_H?.low ?? Infinity);
+  const peaks = conditions(specification).map(({ loadCurrent_A, drops }) => {
+    const { up_V } = stage.inductorVoltages({ inputVoltage_V, outputVoltage_V, loadCurrent_A }, drops);
+    const rise_A = (up_V / least_H) * minimumOnTime_s.high;
+    return load_A === null ? rise_A : Math.max(rise_A, loadCurrent_A + rise_A / 2);
+  });
+  return Math.max(...peaks);
 }
