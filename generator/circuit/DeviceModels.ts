@@ -26,9 +26,9 @@ export const bipolar = {
 /** Logic-level small-signal MOSFET as the reset switch. */
 export const resetSwitch = {
   threshold_V: 1.5,
-  /** Transconductance parameter with its aspect ratio of one hundred [A/V²]. */
+  /** Transconductance parameter at its width over length of one hundred [A/V²]. */
   transconductance_A_per_V2: 0.1,
-  aspect: 100,
+  widthLengthRatio: 100,
   /** Gate-drain capacitance: couples the clock edge into the timing capacitor [F]. */
   gateDrain_F: 1e-12,
 } as const;

@@ -22,22 +22,23 @@ export interface SpecificationSource {
   readonly sets: readonly string[];
 }
 
-export interface SimulationProgress {
-  readonly done: number;
-  readonly total: number;
-  readonly file: string;
-}
-
 export interface SimulationOptions {
   readonly timeout_s: number;
-  readonly onProgress: (progress: SimulationProgress) => void;
+  readonly onProgress: (progress: {
+    readonly done: number;
+    readonly total: number;
+    readonly file: string;
+  }) => void;
   /** Deck texts to run instead of the design's own, by file name. */
   readonly texts?: ReadonlyMap<string, string>;
 }
 
-export type SimulationOutcome<Waves> =
-  | { readonly ok: true; readonly simulation: Simulation; readonly waveforms: Waves }
-  | { readonly ok: false; readonly reason: string };
+export interface SimulationRun<Waves> {
+  readonly simulation: Simulation;
+  readonly waveforms: Waves;
+  /** Why decks did not run to their end, by file. */
+  readonly failures: ReadonlyMap<string, string>;
+}
 
 /**
  * The stages of the pipeline as the commands use them; each is loaded when it is first called.
@@ -57,11 +58,7 @@ export interface Stages<Design = unknown, Waves = unknown> {
     kind: 'embedded' | 'installed',
     env: Readonly<Record<string, string | undefined>>,
   ): Promise<EngineOpening>;
-  simulate(
-    design: Design,
-    engine: SpiceEngine,
-    options: SimulationOptions,
-  ): Promise<SimulationOutcome<Waves>>;
+  simulate(design: Design, engine: SpiceEngine, options: SimulationOptions): Promise<SimulationRun<Waves>>;
   result(design: Design, rules: readonly RuleOutcome[], simulation: Simulation | null): Promise<Result>;
   files(design: Design, result: Result, waveforms: Waves | null): Promise<ReadonlyMap<string, string>>;
 }

@@ -4,10 +4,15 @@ import { unforeseen } from './problems/unforeseen.ts';
 import type { Session } from './Session.ts';
 import type { Stages } from './Stages.ts';
 import { conclude, ending } from './Step.ts';
-import type { Surroundings } from './Surroundings.ts';
+import type { CommandFileSystem, Surroundings } from './Surroundings.ts';
 import { shippedStages } from './shippedStages.ts';
 import { openConsole } from './terminal/openConsole.ts';
 import { versionText } from './version.ts';
+
+/** What the caller lends of its process; `node:fs` serves as well as `node:fs/promises`. */
+export interface MainSurroundings extends Omit<Surroundings, 'fs'> {
+  readonly fs: CommandFileSystem | { readonly promises: CommandFileSystem };
+}
 
 /**
  * The whole command line as a function: what the process would print and do, and its exit code.
@@ -16,9 +21,11 @@ import { versionText } from './version.ts';
  */
 export async function main(
   argv: readonly string[],
-  surroundings: Surroundings,
+  lent: MainSurroundings,
   stages: Stages = shippedStages as Stages,
 ): Promise<ExitCode> {
+  const { fs } = lent;
+  const surroundings: Surroundings = { ...lent, fs: 'promises' in fs ? fs.promises : fs };
   const { request, manners } = await readCommandLine(argv);
   const console = openConsole(surroundings, manners);
   const session = { surroundings, console, stages };

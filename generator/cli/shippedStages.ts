@@ -1,7 +1,9 @@
+import type { SizedDesign } from '../circuit/SizedDesign.ts';
+import type { Waveforms } from '../spice/Deck.ts';
 import type { Stages } from './Stages.ts';
 
 /** The real stages: the one place where the command line and the pipeline meet. */
-export const shippedStages: Stages<never, never> = {
+export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>> = {
   async decodeDocument(bytes, name) {
     const { decodeDocument } = await import('../spec/decodeDocument.ts');
     return decodeDocument(bytes, name);
@@ -19,11 +21,8 @@ export const shippedStages: Stages<never, never> = {
     return specificationSchema();
   },
   async resultSchema() {
-    const [{ resultSchema }, { toJSONSchema }] = await Promise.all([
-      import('../emit/resultSchema.ts'),
-      import('zod'),
-    ]);
-    return toJSONSchema(resultSchema);
+    const { default: document } = await import('../emit/resultDocument.built.ts');
+    return document;
   },
   async openEngine(kind, env) {
     if (kind === 'installed') {
@@ -33,22 +32,35 @@ export const shippedStages: Stages<never, never> = {
     const { openEmbeddedEngine } = await import('../spice/engine/embedded.ts');
     return openEmbeddedEngine();
   },
-  async design() {
-    throw new Error('design is not wired yet');
+  async design(request) {
+    const { design } = await import('../design.ts');
+    return design(request);
   },
-  async alternative() {
-    throw new Error('design is not wired yet');
+  async alternative({ alternative }) {
+    const { cycleRatio } = await import('../law/innerLoop.ts');
+    const { min, max } = alternative.extremes;
+    return {
+      kind: alternative.law.kind,
+      dampingIndexMin: min.dampingIndex,
+      dampingIndexMax: max.dampingIndex,
+      cycleRatioMin: cycleRatio(min.dampingIndex),
+      cycleRatioMax: cycleRatio(max.dampingIndex),
+    };
   },
-  async ruleQuantities() {
-    throw new Error('design is not wired yet');
+  async ruleQuantities(design) {
+    const { ruleQuantities } = await import('../rules/ruleQuantities.ts');
+    return ruleQuantities(design);
   },
-  async simulate() {
-    throw new Error('design is not wired yet');
+  async simulate(design, engine, options) {
+    const { simulateDesign } = await import('../simulateDesign.ts');
+    return simulateDesign(design, engine, options);
   },
-  async result() {
-    throw new Error('design is not wired yet');
+  async result(design, rules, simulation) {
+    const { designResult } = await import('../design.ts');
+    return designResult(design, rules, simulation);
   },
-  async files() {
-    throw new Error('design is not wired yet');
+  async files(design, result, waveforms) {
+    const { designFiles } = await import('../designFiles.ts');
+    return designFiles(design, result, waveforms);
   },
 };

@@ -1,4 +1,3 @@
-/** As package.json has it; a test holds the two equal. */
-export const version = '0.1.0';
+import { toolVersion } from '../report/toolVersion.ts';
 
-export const versionText = `counterslope ${version}\n`;
+export const versionText = `counterslope ${toolVersion}\n`;

@@ -1,5 +1,4 @@
 import { type OperatingRegion, type RegionPoint, regionPoint } from './OperatingRegion.ts';
-import type { OperatingPoint } from './PowerStage.ts';
 
 export interface Extreme {
   readonly value: number;
@@ -34,30 +33,36 @@ export function extremesOver(region: OperatingRegion, figure: (point: RegionPoin
   };
 }
 
-/** Pairs of vertices of the same output and drops. */
+/** Pairs of vertices of the same output. */
 function lines(vertices: readonly RegionPoint[]): (readonly [RegionPoint, RegionPoint])[] {
   return vertices.flatMap((a, index) =>
     vertices
       .slice(index + 1)
-      .filter((b) => a.outputIndex === b.outputIndex && a.drops === b.drops)
+      .filter((b) => a.outputIndex === b.outputIndex)
       .map((b) => [a, b] as const),
   );
 }
 
-/** The point at a share of the way between two of one output and the same drops. */
+/** The point at a share of the way between two of one output; their drops are mixed as well. */
 export function pointBetween(
   { stage }: OperatingRegion,
   a: RegionPoint,
   b: RegionPoint,
   t: number,
 ): RegionPoint {
-  const mix = (pick: (point: OperatingPoint) => number) => pick(a) + t * (pick(b) - pick(a));
+  const mix = (from: number, to: number) => from + t * (to - from);
   const point = {
-    inputVoltage_V: mix((p) => p.inputVoltage_V),
-    outputVoltage_V: mix((p) => p.outputVoltage_V),
-    loadCurrent_A: mix((p) => p.loadCurrent_A),
+    inputVoltage_V: mix(a.inputVoltage_V, b.inputVoltage_V),
+    outputVoltage_V: mix(a.outputVoltage_V, b.outputVoltage_V),
+    loadCurrent_A: mix(a.loadCurrent_A, b.loadCurrent_A),
   };
-  return regionPoint(stage, point, a.drops, a.outputIndex);
+  const drops = {
+    rectifierDrop_V: mix(a.drops.rectifierDrop_V, b.drops.rectifierDrop_V),
+    switch_ohm: mix(a.drops.switch_ohm, b.drops.switch_ohm),
+    winding_ohm: mix(a.drops.winding_ohm, b.drops.winding_ohm),
+    rectifier_ohm: mix(a.drops.rectifier_ohm, b.drops.rectifier_ohm),
+  };
+  return regionPoint(stage, point, drops, a.outputIndex);
 }
 
 /** Where a function of 0 to 1 is stationary inside, as far as the stretches resolve it. */

@@ -12,9 +12,7 @@ export function pointsAtDuty(region: OperatingRegion, duty: number): RegionPoint
   return vertices.flatMap((a, index) =>
     vertices
       .slice(index + 1)
-      .filter(
-        (b) => a.outputIndex === b.outputIndex && a.drops === b.drops && a.duty > duty !== b.duty > duty,
-      )
+      .filter((b) => a.outputIndex === b.outputIndex && a.duty > duty !== b.duty > duty)
       .map((b) => crossing(region, a, b, duty)),
   );
 }

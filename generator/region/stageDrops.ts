@@ -2,32 +2,33 @@ import type { Quantity } from '../base/Quantity.ts';
 import type { Specification } from '../spec/Specification.ts';
 import type { StageDrops } from './PowerStage.ts';
 
-type Corner = 'low' | 'high';
-
 /** Drops of a nominal unit. */
-export function nominalDrops(specification: Specification): StageDrops {
-  return dropsAt(specification, 'nominal', 'nominal');
+export function nominalDrops({ losses, rectifierDrop_V }: Specification): StageDrops {
+  return {
+    rectifierDrop_V: rectifierDrop_V.nominal,
+    switch_ohm: losses?.switch_ohm.nominal ?? 0,
+    winding_ohm: losses?.winding_ohm.nominal ?? 0,
+    rectifier_ohm: losses?.rectifier_ohm.nominal ?? 0,
+  };
 }
 
 /**
- * The corners of rectifier drop and conduction losses.
+ * A unit's drops: the rectifier's as it is, the resistances at a share of the way from low to high.
  *
- * For a fixed point the damping index is linear-fractional in each of them, so that its extremes are
- * at these corners; the resistances move together, being heated together.
+ * The resistances move together, being heated together.
  */
-export function dropCorners(specification: Specification): readonly StageDrops[] {
-  const corners: Corner[] = ['low', 'high'];
-  const all = corners.flatMap((drop) => corners.map((losses) => dropsAt(specification, drop, losses)));
-  const keys = all.map((drops) => JSON.stringify(drops));
-  return all.filter((_, index) => keys.indexOf(keys[index]!) === index);
+export function dropsAt({ losses }: Specification, rectifierDrop_V: number, share: number): StageDrops {
+  const between = (quantity?: Quantity) =>
+    quantity === undefined ? 0 : quantity.low + share * (quantity.high - quantity.low);
+  return {
+    rectifierDrop_V,
+    switch_ohm: between(losses?.switch_ohm),
+    winding_ohm: between(losses?.winding_ohm),
+    rectifier_ohm: between(losses?.rectifier_ohm),
+  };
 }
 
-function dropsAt(specification: Specification, drop: keyof Quantity, resistance: keyof Quantity): StageDrops {
-  const { losses, rectifierDrop_V } = specification;
-  return {
-    rectifierDrop_V: rectifierDrop_V[drop],
-    switch_ohm: losses?.switch_ohm[resistance] ?? 0,
-    winding_ohm: losses?.winding_ohm[resistance] ?? 0,
-    rectifier_ohm: losses?.rectifier_ohm[resistance] ?? 0,
-  };
+/** Whether any resistance has a tolerance: only then is there a way to go from low to high. */
+export function lossesVary({ losses }: Specification): boolean {
+  return losses !== null && Object.values(losses).some(({ low, high }) => low !== high);
 }

@@ -35,8 +35,10 @@ export class DeckFaults {
   /** Faults of an expression, placed by the offset in the element's text. */
   addExpression(within: ElementText, key: string, faults: readonly ExpressionFault[]): null {
     for (const { offset, ...complaint } of faults) {
-      const start = within.text.search(/\S/);
-      this.add(within.origins[Math.max(offset, start)] ?? within.element.start, key, complaint);
+      const first = within.text.search(/\S/);
+      // What the parser misses at the end of the text is missing behind its last character.
+      const index = Math.min(Math.max(offset, first), within.origins.length - 1);
+      this.add(within.origins[index] ?? within.element.start, key, complaint);
     }
     return null;
   }
@@ -68,7 +70,7 @@ export class DeckFaults {
   textOf(element: XmlElement, key: string): ElementText | null {
     const read = plainText(this.#source.text, element.contentFrom, element.contentTo);
     if ('text' in read) return { ...read, element };
-    const fix = 'Write &lt; for < and &amp; for &; no elements inside.';
+    const fix = 'write &lt; for < and &amp; for &; no elements inside';
     const received = read.markup.slice(0, 40);
     return this.add(read.at, key, { code: 'deck-text', expected: 'plain text', received, fix });
   }

@@ -1,4 +1,4 @@
-import { unit } from 'mathjs';
+import { unit } from './mathLibrary.ts';
 
 /** Powers of volt, ampere and second: every electrical quantity is a product of these three. */
 export interface Dimension {

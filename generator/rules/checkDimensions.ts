@@ -73,7 +73,7 @@ function condition(operand: Expression, operator: string, faults: Faults): 'trut
   return complain(faults, 'expression-type', `a comparison beside ${operator}`, received, bracketsFix);
 }
 
-const bracketsFix = 'Put the comparison in brackets: not (a <= b).';
+const bracketsFix = 'put the comparison in brackets: not (a <= b)';
 
 function alike(operands: readonly Expression[], operator: string, faults: Faults): Dimension | null {
   const types = operands.map((operand) => numeric(operand, operator, faults));
@@ -82,7 +82,7 @@ function alike(operands: readonly Expression[], operator: string, faults: Faults
   const odd = others.find((other) => other !== null && !sameDimension(first, other));
   if (odd === undefined || odd === null) return first;
   const received = `${dimensionInWords(first)} ${operator} ${dimensionInWords(odd)}`;
-  const fix = 'Give both sides the same unit; a bare number has none.';
+  const fix = 'give both sides the same unit; a bare number has none';
   return complain(
     faults,
     'dimension-mismatch',
@@ -119,17 +119,17 @@ function powerType(base: Dimension, exponent: Expression, faults: Faults): Dimen
   const power = isConstant ? numberOf(exponent, {}) : null;
   if (power !== null && !(Math.abs(power) <= greatestPower)) {
     const expected = `an exponent between -${greatestPower} and ${greatestPower}`;
-    return complain(faults, 'expression-exponent', expected, String(power), 'Write a smaller power.');
+    return complain(faults, 'expression-exponent', expected, String(power), 'write a smaller power');
   }
   if (sameDimension(base, dimensionless)) return dimensionless;
   if (power !== null) return timesPower(dimensionless, base, power);
   const received = `a power of ${dimensionInWords(base)}`;
-  return complain(faults, 'expression-exponent', 'a number as exponent', received, 'Divide by a unit first.');
+  return complain(faults, 'expression-exponent', 'a number as exponent', received, 'divide by a unit first');
 }
 
 function plain(dimension: Dimension, expected: string, faults: Faults): Dimension | null {
   if (sameDimension(dimension, dimensionless)) return dimension;
-  const fix = 'Divide by a quantity of the same unit first.';
+  const fix = 'divide by a quantity of the same unit first';
   return complain(faults, 'dimension-mismatch', expected, dimensionInWords(dimension), fix);
 }
 

@@ -6,7 +6,7 @@ import type { XmlElement } from './readXml.ts';
 /** Refuses every element and attribute that the format does not have, with the nearest that it has. */
 export function checkMarkup(root: XmlElement, faults: DeckFaults): void {
   if (root.name === 'ruleDeck') checkElement(root, 'ruleDeck', faults);
-  else refuseElement(root, ['ruleDeck'], faults);
+  else refuseElement(root, ['ruleDeck'], faults, 'name the root ruleDeck');
 }
 
 function checkElement(element: XmlElement, name: ElementName, faults: DeckFaults): void {
@@ -23,7 +23,7 @@ function checkElement(element: XmlElement, name: ElementName, faults: DeckFaults
   }
   const stray = faults.strayText(element);
   if (stray !== null) {
-    const fix = 'Put it into an element, or remove it.';
+    const fix = 'put it into an element, or remove it';
     faults.add(stray.at, element.name, {
       code: 'deck-text',
       expected: 'elements only',
@@ -33,9 +33,14 @@ function checkElement(element: XmlElement, name: ElementName, faults: DeckFaults
   }
 }
 
-function refuseElement(element: XmlElement, known: readonly string[], faults: DeckFaults): void {
+function refuseElement(
+  element: XmlElement,
+  known: readonly string[],
+  faults: DeckFaults,
+  otherwise = 'remove it',
+): void {
   const near = nearest(element.name, known);
-  const fix = near === null ? 'Remove it.' : `Did you mean ${near}?`;
+  const fix = near === null ? otherwise : `did you mean ${near}?`;
   faults.add(element.start, element.name, {
     code: 'unknown-element',
     expected: known.join(', '),
@@ -51,7 +56,7 @@ function refuseAttribute(
   faults: DeckFaults,
 ): void {
   const near = nearest(attribute, known);
-  const fix = near === null ? 'Remove it.' : `Did you mean ${near}?`;
+  const fix = near === null ? 'remove it' : `did you mean ${near}?`;
   faults.add(faults.attributeAt(element, attribute), `${element.name}.${attribute}`, {
     code: 'unknown-attribute',
     expected: known.length === 0 ? 'no attributes' : known.join(', '),

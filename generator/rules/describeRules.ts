@@ -58,6 +58,6 @@ function unknownRule(rules: readonly Rule[], id: string) {
     place: null,
     expected: 'the id of a rule',
     received: id,
-    fix: near === null ? '`rules list` shows them all.' : `Did you mean ${near}?`,
+    fix: near === null ? 'see counterslope rules list' : `did you mean ${near}?`,
   };
 }

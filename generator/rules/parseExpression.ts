@@ -1,9 +1,9 @@
 import type { ConstantNode, FunctionNode, MathNode, OperatorNode, SymbolNode } from 'mathjs';
-import { parse } from 'mathjs';
 import { nearest } from '../base/nearest.ts';
 import { dimensionless, type UnitScale, unitScale } from './Dimension.ts';
 import type { Arithmetic, Expression, ExpressionFault, FunctionName } from './Expression.ts';
 import { functionNames } from './Expression.ts';
+import { parse } from './mathLibrary.ts';
 import { isQuantityName, quantities } from './quantities.ts';
 import type { Comparison } from './RuleDeck.ts';
 
@@ -27,7 +27,7 @@ export function parseExpression(text: string): Expression | readonly ExpressionF
   // One character for one, so that offsets stay true. A line break would begin a second statement.
   const line = text.replace(/\s/gu, ' ').replace(/[µμ]/gu, 'u');
   if (line.length > expressionBounds.characters) return [tooLarge(`${line.length} characters`)];
-  if (line.trim() === '') return [fault('expression-empty', 0, 'an expression', 'nothing', 'Write it.')];
+  if (line.trim() === '') return [fault('expression-empty', 0, 'an expression', 'nothing', 'write it')];
   const foreign = foreignCharacter.exec(line);
   if (foreign !== null) {
     return [
@@ -40,7 +40,7 @@ export function parseExpression(text: string): Expression | readonly ExpressionF
   } catch (error) {
     const at = (error as { char?: number }).char ?? 1;
     const message = error instanceof Error ? error.message : String(error);
-    return [fault('expression-syntax', at - 1, 'an expression', message, 'Mend the expression.')];
+    return [fault('expression-syntax', at - 1, 'an expression', message, 'mend the expression')];
   }
   return new Gate(line).admit(root);
 }
@@ -57,13 +57,13 @@ function fault(
 
 function notAllowed(offset: number, received: string): ExpressionFault {
   const expected = `numbers with units, quantities, + - * / ^ <= >= < > and or not, ${functionNames.join(' ')}`;
-  return fault('expression-not-allowed', offset, expected, received, 'Write the rule with these alone.');
+  return fault('expression-not-allowed', offset, expected, received, 'write the rule with these alone');
 }
 
 function tooLarge(received: string): ExpressionFault {
   const { characters, nodes, depth } = expressionBounds;
   const expected = `at most ${characters} characters, ${nodes} terms, ${depth} levels`;
-  return fault('expression-too-large', 0, expected, received, 'Split it into several rules.');
+  return fault('expression-too-large', 0, expected, received, 'split it into several rules');
 }
 
 /** One walk over one parsed expression: it gathers faults and counts nodes as it goes. */
@@ -79,7 +79,7 @@ class Gate {
 
   admit(root: MathNode): Expression | readonly ExpressionFault[] {
     const expression = this.#walk(root, 1);
-    if (this.#overgrown) return [tooLarge('more')];
+    if (this.#overgrown) return [tooLarge('more terms or levels')];
     return expression !== null && this.#faults.length === 0 ? expression : this.#faults;
   }
 
@@ -101,10 +101,8 @@ class Gate {
         return this.#call(node as FunctionNode, depth);
       case 'OperatorNode':
         return this.#operator(node as OperatorNode, depth);
-      case 'RelationalNode':
-        return this.#refuse('a chain of comparisons', '<');
       default:
-        return this.#refuse(node.type.replace(/Node$/, '').toLowerCase(), '');
+        return this.#refuse(inWords.get(node.type) ?? node.type, '');
     }
   }
 
@@ -124,7 +122,7 @@ class Gate {
     if (scale !== null)
       return { kind: 'number', value: Number(`1e${scale.decade}`), dimension: scale.dimension };
     const near = nearest(name, Object.keys(quantities));
-    const fix = near === null ? '`rules explain` lists the quantities.' : `Did you mean ${near}?`;
+    const fix = near === null ? 'rules/rule-deck.xsd lists the quantities' : `did you mean ${near}?`;
     this.#faults.push(
       fault('unknown-quantity', this.#offsetOf(name), 'a quantity of the design or a unit', name, fix),
     );
@@ -140,13 +138,7 @@ class Gate {
     if (!fits) {
       const received = `${name} with ${node.args.length}`;
       this.#faults.push(
-        fault(
-          'expression-arguments',
-          this.#offsetOf(name),
-          `${wanted} arguments`,
-          received,
-          'Mend the call.',
-        ),
+        fault('expression-arguments', this.#offsetOf(name), `${wanted} arguments`, received, 'mend the call'),
       );
       return null;
     }
@@ -181,12 +173,10 @@ class Gate {
   }
 
   #refuse(received: string, token: string): null {
-    if (received === '==' || received === '!=') {
-      const fix = 'Computed figures are never exactly equal: write <= or >=.';
-      this.#faults.push(
-        fault('expression-not-allowed', this.#offsetOf(token), '<= >= < or >', received, fix),
-      );
-    } else this.#faults.push(notAllowed(this.#offsetOf(token), received));
+    const offset = this.#offsetOf(token);
+    const remedy = remedies.get(received);
+    if (remedy === undefined) this.#faults.push(notAllowed(offset, received));
+    else this.#faults.push(fault('expression-not-allowed', offset, '<= >= < or >', received, remedy));
     return null;
   }
 
@@ -196,6 +186,21 @@ class Gate {
     return Math.max(0, this.#text.search(new RegExp(`\\b${token}\\b`)));
   }
 }
+
+/** What the library parses and the gate does not let through, as a person would call it. */
+const inWords: ReadonlyMap<string, string> = new Map([
+  ['AccessorNode', 'access to a property'],
+  ['AssignmentNode', 'an assignment'],
+  ['FunctionAssignmentNode', 'the definition of a function'],
+  ['RelationalNode', 'a chain of comparisons'],
+]);
+
+const neverEqual = 'computed figures are never exactly equal: write <= or >=';
+const remedies: ReadonlyMap<string, string> = new Map([
+  ['==', neverEqual],
+  ['!=', neverEqual],
+  ['a chain of comparisons', 'compare once; a condition may join two comparisons with and'],
+]);
 
 function isFunctionName(name: string): name is FunctionName {
   return (functionNames as readonly string[]).includes(name);

@@ -35,13 +35,13 @@ function readAssignment(
   const add = (code: string, expected: string, received: string, fix: string) =>
     faults.push({ code, offset: start, expected, received, fix });
   if (equals < 0) {
-    add('example-form', 'quantity = value', piece.trim().slice(0, 40), 'Separate several with semicolons.');
+    add('example-form', 'quantity = value', piece.trim().slice(0, 40), 'separate several with semicolons');
   } else if (!isQuantityName(name)) {
     const near = nearest(name, Object.keys(quantities));
-    const fix = near === null ? 'Name a quantity of the design.' : `Did you mean ${near}?`;
+    const fix = near === null ? 'name a quantity of the design' : `did you mean ${near}?`;
     add('unknown-quantity', 'a quantity of the design', name, fix);
   } else if (values.has(name)) {
-    add('example-form', 'each quantity once', `${name} twice`, 'Remove one.');
+    add('example-form', 'each quantity once', `${name} twice`, 'remove one');
   } else if (piece.slice(equals + 1).trim() === 'none') {
     values.set(name, null);
   } else {
@@ -61,7 +61,7 @@ function constantOf(text: string, name: string): number | readonly ExpressionFau
   const fits = type !== 'truth' && isConstant(parsed) && sameDimension(type as typeof wanted, wanted);
   if (fits) return numberOf(parsed, {});
   const expected = `a value: ${dimensionInWords(wanted)}`;
-  const fix = 'Write the value with its unit.';
+  const fix = 'write the value with its unit';
   return [{ code: 'dimension-mismatch', offset: 0, expected, received: text.trim(), fix }];
 }
 

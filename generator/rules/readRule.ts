@@ -81,7 +81,7 @@ function collapse(text: string): string {
 
 function readId(element: XmlElement, faults: DeckFaults): string | null {
   const id = element.attributes.get('id');
-  const fix = 'Name it after what it asks for: signal-floor.';
+  const fix = 'name it after what it asks for: signal-floor';
   const expected = `an id of small letters, figures and hyphens, at most ${longestId}`;
   if (id === undefined) {
     return faults.add(element.start, 'rule', { code: 'missing-attribute', expected, received: 'none', fix });
@@ -106,7 +106,7 @@ function readChoice<T extends string>(
     code: value === undefined ? 'missing-attribute' : 'unknown-value',
     expected: `${attribute}: ${choices.join(', ')}`,
     received: value === undefined ? 'none' : value.slice(0, 80),
-    fix: near === null ? 'Choose one of them.' : `Did you mean ${near}?`,
+    fix: near === null ? 'choose one of them' : `did you mean ${near}?`,
   });
 }
 
@@ -118,7 +118,7 @@ function readParts(element: XmlElement, key: string, faults: DeckFaults): Readon
     if (child.name === 'example') continue;
     if (seen.has(child.name)) {
       const complaint = { code: 'element-repeated', expected: `one ${child.name}`, received: 'another' };
-      faults.add(child.start, `${key}.${child.name}`, { ...complaint, fix: 'Keep one.' });
+      faults.add(child.start, `${key}.${child.name}`, { ...complaint, fix: 'keep one' });
       continue;
     }
     seen.add(child.name);
@@ -126,7 +126,7 @@ function readParts(element: XmlElement, key: string, faults: DeckFaults): Readon
     if (text !== null) parts.set(child.name, text);
   }
   for (const part of requiredParts.filter((name) => !seen.has(name))) {
-    const complaint = { code: 'missing-element', expected: part, received: 'none', fix: `Add <${part}>.` };
+    const complaint = { code: 'missing-element', expected: part, received: 'none', fix: `add <${part}>` };
     faults.add(element.start, `${key}.${part}`, complaint);
   }
   return parts;
@@ -138,7 +138,7 @@ function sentenceOf(part: ElementText | undefined, key: string, faults: DeckFaul
   if (text.length > 0 && text.length <= longestText) return text;
   const received = text === '' ? 'nothing' : `${text.length} characters`;
   const complaint = { code: 'deck-text', expected: `1 to ${longestText} characters`, received };
-  return faults.add(part.element.start, key, { ...complaint, fix: 'Say it in a sentence or two.' });
+  return faults.add(part.element.start, key, { ...complaint, fix: 'say it in a sentence or two' });
 }
 
 /** A single comparison, so that a measured value, a limit and their unit can be reported. */
@@ -149,11 +149,11 @@ function readComparison(part: ElementText, rule: string, faults: DeckFaults): Co
   const complain = (expected: string, received: string, fix: string) =>
     faults.addExpression(part, key, [{ code: 'requirement-form', offset: 0, expected, received, fix }]);
   if (expression.kind !== 'comparison') {
-    const fix = 'Write measured <= limit; conditions go into <when>.';
+    const fix = 'write measured <= limit; conditions go into <when>';
     return complain('a single comparison', collapse(part.text), fix);
   }
   if (quantitiesIn(expression.left).length > 0) return expression;
-  const fix = 'Put what is measured on the left and the limit on the right.';
+  const fix = 'put what is measured on the left and the limit on the right';
   return complain('a quantity of the design on the left', collapse(part.text), fix);
 }
 
@@ -167,7 +167,7 @@ function readCondition(part: ElementText, rule: string, faults: DeckFaults): Exp
     expected: 'a comparison',
     received: collapse(part.text),
   };
-  return faults.addExpression(part, key, [{ ...complaint, fix: 'Write when the rule applies: a > b.' }]);
+  return faults.addExpression(part, key, [{ ...complaint, fix: 'write when the rule applies: a > b' }]);
 }
 
 /** Through the gate and the dimension check. */

@@ -30,12 +30,12 @@ export function readRuleDeck(text: string, name: string): Outcome<CheckedDeck> {
   const version = xml.value.attributes.get('version');
   if (version !== '1') {
     const complaint = { code: 'deck-version', expected: 'version="1"', received: version ?? 'none' };
-    faults.add(xml.value.start, 'ruleDeck.version', { ...complaint, fix: 'Write version="1".' });
+    faults.add(xml.value.start, 'ruleDeck.version', { ...complaint, fix: 'write version="1"' });
   }
   const elements = xml.value.children.filter((child) => child.name === 'rule');
   if (elements.length === 0) {
     const complaint = { code: 'deck-empty', expected: 'at least one rule', received: 'none' };
-    faults.add(xml.value.start, 'ruleDeck', { ...complaint, fix: 'Add a rule.' });
+    faults.add(xml.value.start, 'ruleDeck', { ...complaint, fix: 'add a rule' });
   }
   const rules = elements.map((element) => readRule(element, faults)).filter((rule) => rule !== null);
   refuseRepeatedIds(elements, faults);
@@ -51,7 +51,7 @@ function refuseRepeatedIds(elements: Elements, faults: DeckFaults): void {
     const id = element.attributes.get('id');
     if (id !== undefined && seen.has(id)) {
       const complaint = { code: 'rule-id-repeated', expected: 'an id of its own', received: id };
-      faults.add(faults.attributeAt(element, 'id'), id, { ...complaint, fix: 'Rename or remove one.' });
+      faults.add(faults.attributeAt(element, 'id'), id, { ...complaint, fix: 'rename or remove one' });
     }
     if (id !== undefined) seen.add(id);
   }
@@ -63,7 +63,7 @@ function checkExamples(rule: CheckedRule, faults: DeckFaults): void {
     const outcome = outcomeOf(interpret(rule), example.quantities);
     if (outcome === example.outcome) continue;
     const complaint = { code: 'example-contradicts', expected: example.outcome, received: outcome };
-    faults.add(rule.start, `${rule.id}.example`, { ...complaint, fix: 'Mend the rule or the example.' });
+    faults.add(rule.start, `${rule.id}.example`, { ...complaint, fix: 'mend the rule or the example' });
   }
 }
 

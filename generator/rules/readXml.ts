@@ -31,17 +31,14 @@ export function readXml(source: SourceText): Outcome<XmlElement> {
   try {
     nodes = parser().parse(source.text);
   } catch (error) {
-    const received = error instanceof Error ? error.message : String(error);
-    return failure([
-      problem(source, 0, 'xml-refused', 'a plain rule deck', received, 'Keep to its elements.'),
-    ]);
+    return failure([refusedByParser(source, error)]);
   }
   const roots = elementsOf(nodes, source.text);
   const [root, second] = roots;
   if (root === undefined || second !== undefined) {
     const at = second?.start ?? 0;
     return failure([
-      problem(source, at, 'xml-ill-formed', 'one root', `${roots.length}`, 'Keep one ruleDeck.'),
+      problem(source, at, 'xml-ill-formed', 'one root', `${roots.length}`, 'keep one ruleDeck'),
     ]);
   }
   return success(root);
@@ -66,28 +63,28 @@ function forbiddenMarkup(source: SourceText): Problem | null {
   const { text } = source;
   if (text.length > deckBounds.characters) {
     const expected = `at most ${deckBounds.characters} characters`;
-    return problem(source, 0, 'xml-too-large', expected, `${text.length}`, 'Split the deck.');
+    return problem(source, 0, 'xml-too-large', expected, `${text.length}`, 'split the deck');
   }
   // biome-ignore lint/suspicious/noControlCharactersInRegex: they are what is looked for
   const control = text.search(/[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f\ufffe\uffff]/);
   if (control >= 0) {
-    return problem(source, control, 'xml-ill-formed', 'text', 'a control character', 'Remove it.');
+    return problem(source, control, 'xml-ill-formed', 'text', 'a control character', 'remove it');
   }
   const bare = text.replace(/<!--[\s\S]*?-->|<!\[CDATA\[[\s\S]*?\]\]>/g, (whole) => ' '.repeat(whole.length));
   const declaration = bare.indexOf('<!');
   if (declaration >= 0) {
     const received = bare.slice(declaration, declaration + 9);
-    return problem(source, declaration, 'xml-refused', 'no document type', received, 'Remove it.');
+    return problem(source, declaration, 'xml-refused', 'no document type', received, 'remove it');
   }
   const instruction = bare.search(/<\?(?!xml\s)/);
   const late = instruction >= 0 ? instruction : bare.indexOf('<?', 1);
   if (late < 0) return null;
-  return problem(source, late, 'xml-refused', 'no processing instruction', '<?', 'Remove it.');
+  return problem(source, late, 'xml-refused', 'no processing instruction', '<?', 'remove it');
 }
 
 function illFormed(source: SourceText, error: { msg: string; line: number; col?: number }): Problem {
   const place = { path: source.path, line: error.line, column: error.col ?? 1 };
-  const fix = 'Mend the markup; in text write &lt; for < and &amp; for &.';
+  const fix = 'mend the markup; in text write &lt; for < and &amp; for &';
   const text = { code: 'xml-ill-formed', expected: 'well-formed XML', received: error.msg, fix };
   return { ...text, severity: 'error', key: null, place };
 }
@@ -101,6 +98,15 @@ function problem(
   fix: string,
 ): Problem {
   return { code, severity: 'error', key: null, place: placeAt(source, at), expected, received, fix };
+}
+
+/** The parser throws on elements nested too deep, and on names such as `__proto__`. */
+function refusedByParser(source: SourceText, error: unknown): Problem {
+  const message = error instanceof Error ? error.message : String(error);
+  const reserved = /"(\w+)" is a reserved/.exec(message)?.[1];
+  const at = reserved === undefined ? 0 : Math.max(0, source.text.indexOf(reserved));
+  const received = reserved === undefined ? message : `the reserved name ${reserved}`;
+  return problem(source, at, 'xml-refused', 'a plain rule deck', received, 'keep to its elements');
 }
 
 type ParsedNode = Readonly<Record<string | symbol, unknown>>;

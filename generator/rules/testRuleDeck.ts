@@ -58,7 +58,7 @@ function contradictionsOf(rule: Rule): readonly Problem[] {
       place: null,
       expected,
       received,
-      fix: 'Mend the rule or the example.',
+      fix: 'mend the rule or the example',
     }));
 }
 
@@ -74,6 +74,6 @@ function untested(rule: Rule): readonly Problem[] {
       place: null,
       expected: `an example that ${outcome}`,
       received: 'none',
-      fix: `Add <example outcome="${outcome}">.`,
+      fix: `add <example outcome="${outcome}">`,
     }));
 }

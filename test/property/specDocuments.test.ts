@@ -23,7 +23,10 @@ function documentOf(keys: readonly SpecKey[]): string {
     const names = path.split('.');
     const last = names.pop()!;
     let group = root;
-    for (const name of names) group = (group[name] ??= {}) as Record<string, unknown>;
+    for (const name of names) {
+      group[name] ??= {};
+      group = group[name] as Record<string, unknown>;
+    }
     group[last] = example;
   }
   return JSON.stringify(root);

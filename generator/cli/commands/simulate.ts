@@ -37,8 +37,13 @@ async function simulateAgain(invocation: Invocation, session: Session): Promise<
   if (!timeout.ok) return timeout;
   const stored = await readStoredDesign(directory, session);
   if (!stored.ok) return stored;
-  const { design, decks, result } = stored.value;
-  const request = { design, engine: engineOf(invocation), timeout_s: timeout.value, texts: decks };
+  const { design, decks, edited, result } = stored.value;
+  const request = {
+    design,
+    engine: engineOf(invocation),
+    timeout_s: timeout.value,
+    stored: { texts: decks, edited },
+  };
   const simulated = await simulate(request, session);
   if (!simulated.ok) return simulated;
 

@@ -30,9 +30,6 @@ export function helpText(name: string | null): string {
   return asText(commandHelp(command));
 }
 
-/** Names that `helpText` knows, for rendering them all at build. */
-export const helpTopics: readonly string[] = commands.map((command) => command.name);
-
 function asText(lines: readonly string[]): string {
   return `${lines.join('\n')}\n`;
 }

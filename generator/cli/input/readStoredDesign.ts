@@ -13,6 +13,8 @@ export interface StoredDesign {
   readonly design: unknown;
   /** The decks as they are on disk now. */
   readonly decks: ReadonlyMap<string, string>;
+  /** Files that are not as they were written. */
+  readonly edited: readonly string[];
 }
 
 const resultFile = 'result.json';
@@ -44,7 +46,8 @@ export async function readStoredDesign(directory: string, session: Session): Pro
     );
   }
   const design = stepOf(await session.stages.design(requestOf(result)), session);
-  return design.ok ? going({ result, design: design.value, decks: set.value.decks }) : design;
+  const { decks, differing } = set.value;
+  return design.ok ? going({ result, design: design.value, decks, edited: differing }) : design;
 }
 
 function resultOf({ result, differing }: StoredSet): Result | null {

@@ -112,14 +112,18 @@ function buildRows({ parts, specification }: Result): string[] {
     .filter((part) => !named.includes(part))
     .reduce((sum, { quantity }) => sum + quantity, 0);
   const texts = named.map(({ reference, text }) => together(`${reference} ${text}`));
-  const rows = row('build', [buildOf(specification), ...texts, together(`and ${others} more`)].join(', '));
+  const rows = row(
+    'build',
+    `${buildOf(specification)}: ${[...texts, together(`and ${others} more`)].join(', ')}`,
+  );
   if (rows.length <= mostPartLines) return rows;
   return [...rows.slice(0, mostPartLines - 1), ...row('', `… ${parts.length} parts in all`)];
 }
 
 function buildOf(specification: Result['specification']): string {
   const ramp = specification.ramp as { readonly build?: unknown; readonly injection?: unknown } | undefined;
-  return `${String(ramp?.build ?? 'circuit')}, injected at ${String(ramp?.injection ?? 'sense')}`;
+  const name = typeof ramp?.build === 'string' && ramp.build !== 'auto' ? `${ramp.build}, ` : '';
+  return `${name}injected at ${String(ramp?.injection ?? 'sense')}`;
 }
 
 function rampRows({ ramp, region }: Result): string[] {
@@ -128,7 +132,10 @@ function rampRows({ ramp, region }: Result): string[] {
     inputs.map((input, end) => together(`${figure(values[end]!, unit)} at ${volts(input)}`)).join(', ');
   return [
     ...row('ramp', `${ends(ramp.comparatorSlope_V_per_s, 'V/s')}, at the comparator`),
-    ...row('current', `${ends(ramp.current_A, 'A')}, into the timing capacitor`),
+    ...row(
+      'current',
+      `${ends(ramp.current_A, 'A')}, into the timing capacitor, ${together(figure(ramp.capacitance_F, 'F'))}`,
+    ),
   ];
 }
 

@@ -14,7 +14,7 @@ export const deckModels = {
   },
   nmos: {
     threshold: fixedNumber(resetSwitch.threshold_V),
-    transconductance: fixedNumber(resetSwitch.transconductance_A_per_V2 / resetSwitch.aspect),
+    transconductance: fixedNumber(resetSwitch.transconductance_A_per_V2 / resetSwitch.widthLengthRatio),
   },
 };
 

@@ -13,8 +13,8 @@ export function elementLine(component: Component): string {
     case 'pnp':
       return `${component.reference} ${nodes} ${component.model}`;
     case 'nmos':
-      // The bulk sits at the source; the width in micrometres carries the aspect ratio.
-      return `M${component.reference} ${nodes} ${component.nodes[2]} ${component.model} W=${fixedNumber(resetSwitch.aspect * 1e-6)} L=1e-6`;
+      // The bulk sits at the source; a length of one micrometre leaves the ratio to the width.
+      return `M${component.reference} ${nodes} ${component.nodes[2]} ${component.model} W=${resetSwitch.widthLengthRatio}u L=1u`;
     case 'opamp':
       return `X${component.reference} ${nodes} ${component.model}`;
   }

@@ -1,3 +1,4 @@
+import * as callbackDisk from 'node:fs';
 import * as disk from 'node:fs/promises';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
@@ -37,6 +38,13 @@ describe('help and version', () => {
 });
 
 describe('init', () => {
+  it('works with either face of the file system of Node', async () => {
+    const cwd = await newFolder();
+    const fs = callbackDisk as unknown as typeof disk;
+    expect((await run(['init', 'rail.yaml'], { cwd, fs })).code).toBe(0);
+    expect(await disk.readdir(cwd)).toEqual(['rail.yaml']);
+  });
+
   it('prints a specification that design reads', async () => {
     const { code, stdout, stderr } = await run(['init']);
     expect([code, stderr]).toEqual([0, '']);

@@ -153,7 +153,7 @@ describe('the gate refuses', () => {
 
   it('points at the word that is not known and names the nearest', () => {
     expect(faultsOf('signalFloor + dampingIndxMin')).toEqual([
-      expect.objectContaining({ code: 'unknown-quantity', offset: 14, fix: 'Did you mean dampingIndexMin?' }),
+      expect.objectContaining({ code: 'unknown-quantity', offset: 14, fix: 'did you mean dampingIndexMin?' }),
     ]);
   });
 

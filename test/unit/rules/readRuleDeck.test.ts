@@ -18,7 +18,7 @@ describe('the deck reader refuses', () => {
         code: 'unknown-element',
         key: 'requirment',
         received: 'requirment',
-        fix: 'Did you mean requirement?',
+        fix: 'did you mean requirement?',
       },
     ]);
   });
@@ -26,7 +26,7 @@ describe('the deck reader refuses', () => {
   it('an unknown attribute, with the nearest, where it stands', () => {
     const text = deckOf(ruleText()).replace('severity="error"', 'severity="error"\n   severty="note"');
     const [problem] = problemsOf(text);
-    expect(problem).toMatchObject({ code: 'unknown-attribute', fix: 'Did you mean severity?' });
+    expect(problem).toMatchObject({ code: 'unknown-attribute', fix: 'did you mean severity?' });
     expect(problem?.place).toEqual({ path: 'own.xml', line: 3, column: 4 });
   });
 
@@ -64,7 +64,7 @@ describe('the deck reader refuses', () => {
 
   it('an unknown severity, with the nearest', () => {
     expect(brief(deckOf(ruleText({ severity: 'eror' })))).toEqual([
-      expect.objectContaining({ code: 'unknown-value', fix: 'Did you mean error?' }),
+      expect.objectContaining({ code: 'unknown-value', fix: 'did you mean error?' }),
     ]);
   });
 

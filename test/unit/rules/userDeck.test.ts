@@ -107,7 +107,7 @@ describe('a rule explained', () => {
     expect(!explained.ok && explained.problems[0]).toMatchObject({
       code: 'unknown-rule',
       received: 'signal-flor',
-      fix: 'Did you mean signal-floor?',
+      fix: 'did you mean signal-floor?',
     });
   });
 
