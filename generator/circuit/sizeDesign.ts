@@ -1,7 +1,13 @@
 import { failure, type Outcome, success } from '../base/Problem.ts';
 import type { Law } from '../law/Law.ts';
 import { laws } from '../law/laws.ts';
-import { type GainSpread, indexExtremes, type LeastGain, leastGain } from '../law/leastGain.ts';
+import {
+  type GainSpread,
+  type IndexExtremes,
+  indexExtremes,
+  type LeastGain,
+  leastGain,
+} from '../law/leastGain.ts';
 import { hasInductance, type LoopCorners, loopCorners } from '../law/loopCorners.ts';
 import { demandOf } from '../ramp/demandOf.ts';
 import { buildRegion } from '../region/buildRegion.ts';
@@ -28,7 +34,7 @@ export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
   const required = leastGain(law, region.value, corners, goal);
 
   if (required.gain === 0 && specification.ramp.gain === null)
-    return failure([rampNotNeeded(request, region.value)]);
+    return failure([rampNotNeeded(request, indexExtremes(law, 0, region.value, corners, exact))]);
   const demand = demandOf(specification, corners, required.gain);
   const sizing = sizeBoardOpamp(demand, request);
   if (!sizing.ok) return sizing;
@@ -80,15 +86,17 @@ function inductanceMissing({ place }: ReadSpecification) {
   };
 }
 
-/** Every duty is so low that the loop meets its goal by itself. */
-function rampNotNeeded({ specification, place }: ReadSpecification, region: OperatingRegion) {
-  const least = Math.min(...region.vertices.map((vertex) => 1 - vertex.duty));
+/** Nothing that the ramp adds to. */
+const exact: GainSpread = { low: 1, high: 1 };
+
+/** Every duty is so low, or so much compensates already, that the loop meets its goal by itself. */
+function rampNotNeeded({ specification, place }: ReadSpecification, { min }: IndexExtremes) {
   return {
     code: 'no-circuit',
     severity: 'error' as const,
     key: 'ramp.gain',
     place: place('ramp.gain'),
-    expected: `goal of the damping index > least damping index without any ramp: above ${least.toPrecision(4)}`,
+    expected: `goal of the damping index > least damping index without any ramp: above ${min.dampingIndex.toPrecision(4)}`,
     received: specification.goal.dampingIndex.toPrecision(4),
     fix: 'no ramp is needed over this region; to build one all the same, give ramp.gain',
   };

@@ -11,11 +11,6 @@ interface Gap {
 
 const gaps: readonly Gap[] = [
   {
-    key: 'converter',
-    wanted: ({ converter }) => (converter === 'buck' ? null : converter),
-    instead: 'buck',
-  },
-  {
     key: 'ramp.law',
     wanted: ({ ramp }) => (ramp.law === 'vin' || ramp.law === 'fixed' ? null : ramp.law),
     instead: 'vin (needs no output sensing) or fixed',
@@ -44,11 +39,6 @@ const gaps: readonly Gap[] = [
     key: 'controller',
     wanted: ({ controller }) => (controller === null ? null : "a controller's own ramp and limits"),
     instead: 'a specification without controller',
-  },
-  {
-    key: 'inductance',
-    wanted: ({ inductance }) => (inductance?.kind === 'ripple' ? 'an inductance tied to ripple' : null),
-    instead: 'a value with its tolerance, or a range',
   },
 ];
 

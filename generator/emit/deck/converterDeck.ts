@@ -2,13 +2,13 @@ import converterTemplate from '../../../templates/converter.cir.hbs';
 import { engineering } from '../../base/engineering.ts';
 import { rampFigures, senseAttenuation } from '../../circuit/rampFigures.ts';
 import type { SizedDesign, SizedLaw } from '../../circuit/SizedDesign.ts';
-import { cycleRatio, dampingIndex } from '../../law/innerLoop.ts';
 import type { RegionPoint } from '../../region/OperatingRegion.ts';
 import { fixedNumber } from '../text/fixedNumber.ts';
 import { netlistComment } from '../text/netlistComment.ts';
 import { clockTiming } from './deckTiming.ts';
+import { operatingState } from './operatingState.ts';
 import { cyclePlan, perturbation } from './perturbation.ts';
-import { buckLines } from './stages/buckLines.ts';
+import { stageLines } from './stages/StageLines.ts';
 import { trackSource } from './trackSource.ts';
 
 const stepsPerPeriod = 1000;
@@ -39,21 +39,26 @@ export function converterDeck(
   const timing = clockTiming(design);
   const inductance_H = design.corners.referenceInductance_H;
   const source = trackSource(design, kind, sized.realisedGain);
-  const ramp_V = sized.law.ramp_V(sized.realisedGain, point);
-  const index = dampingIndex(point.up_V, point.swing_V, ramp_V);
-  const ratio = cycleRatio(index);
-  const ripple_A = (point.up_V / inductance_H) * point.duty * timing.period_s;
-  const peak_A = (specification.load_A?.to.nominal ?? ripple_A) + ripple_A / 2;
+  const state = operatingState(design, sized, point);
   const senseGain = specification.senseGain_V_per_A.nominal;
+  const attenuation = senseAttenuation(design);
+  const onTime_s = point.duty * timing.period_s;
   const figures = rampFigures(design, source.track_V(point.inputVoltage_V));
-  const atTrip_V = figures.comparatorSlope_V_per_s * point.duty * timing.period_s;
-  const stage = buckLines({ ...point, inductance_H, initialCurrent_A: peak_A - ripple_A });
+  const atTrip_V =
+    figures.comparatorSlope_V_per_s * onTime_s +
+    attenuation * senseGain * (state.peak_A + state.freeSlope_A_per_s * onTime_s);
+  const stage = stageLines(specification.converter, {
+    ...point,
+    inductance_H,
+    initialCurrent_A: state.peak_A - state.ripple_A,
+    magnetizing: state.magnetizing,
+  });
   const shift = perturbation(
     point,
     inductance_H,
     timing.period_s,
-    ramp_V,
-    ratio,
+    state.ramp_V,
+    state.cycleRatio,
     specification.maximumDutyRatio,
   );
   const supply = specification.ramp.supply_V.nominal;
@@ -65,8 +70,8 @@ export function converterDeck(
         ? 'Ramp that follows the input voltage'
         : 'Fixed ramp, same block held at one voltage',
     point: `${engineering(point.inputVoltage_V, 'V', 4)} to ${engineering(point.outputVoltage_V, 'V', 4)}, duty ${fixedNumber(point.duty, 4)}`,
-    index: fixedNumber(index, 4),
-    ratio: fixedNumber(ratio, 4),
+    index: fixedNumber(state.dampingIndex, 4),
+    ratio: fixedNumber(state.cycleRatio, 4),
     input: fixedNumber(point.inputVoltage_V, 9),
     supply: fixedNumber(supply),
     track: source.line,
@@ -75,17 +80,25 @@ export function converterDeck(
     edge: fixedNumber(timing.edge_s, 9),
     low: fixedNumber(timing.low_s, 9),
     period: fixedNumber(timing.period_s, 9),
+    stageName: stage.what,
     stage: stage.lines,
     models: stage.models,
     shiftFrom: 'shifted',
     shiftTo: 'wound',
     shift: shift.corners.map((value) => fixedNumber(value, 9)).join(' '),
     senseGain: fixedNumber(senseGain),
-    control: fixedNumber(senseAttenuation(design) * senseGain * peak_A + atTrip_V, 6),
+    control: fixedNumber(atTrip_V, 6),
     clockShare: fixedNumber(1 / supply, 9),
     clearThreshold: fixedNumber(supply / 2),
     step: fixedNumber(timing.period_s / stepsPerPeriod, 9),
     stop: fixedNumber(stop_s, 9),
   });
-  return { text, stop_s, period_s: timing.period_s, point, dampingIndex: index, cycleRatio: ratio };
+  return {
+    text,
+    stop_s,
+    period_s: timing.period_s,
+    point,
+    dampingIndex: state.dampingIndex,
+    cycleRatio: state.cycleRatio,
+  };
 }
