@@ -5,7 +5,8 @@ const specifier = /(\bfrom\s+|\bimport\()(['"])([^'"]+)\2/g;
 
 /**
  * Makes the declarations that tsc wrote fit for a user of the library: only those that `index.d.ts` leads
- * to, under the names of the compiled modules, and without the schema library, which is not installed there.
+ * to, under the names of the compiled modules, and without what is not installed there: the schema
+ * library, and, in a browser's project, the types of Node.
  */
 export function finishTypes(folder) {
   const kept = new Set();
@@ -18,18 +19,22 @@ export function finishTypes(folder) {
     for (const [, , , target] of text.matchAll(specifier)) {
       if (target.startsWith('.')) queue.push(join(dirname(file), target).replace(/\.[jt]s$/, '.d.ts'));
     }
-    writeFileSync(
-      path,
-      text.replace(specifier, (_, before, quote, target) => before + quote + finished(target, file) + quote),
-    );
+    writeFileSync(path, finished(text, file));
   }
   for (const file of readdirSync(folder, { recursive: true })) {
     if (file.endsWith('.d.ts') && !kept.has(file)) rmSync(join(folder, file));
   }
-  copyFileSync(new URL('schemaTypes.d.ts', import.meta.url), join(folder, 'schemaTypes.d.ts'));
+  for (const standIn of ['schemaTypes.d.ts', 'nodeTypes.d.ts']) {
+    copyFileSync(new URL(standIn, import.meta.url), join(folder, standIn));
+  }
 }
 
-function finished(target, file) {
-  if (target === 'zod') return `${relative(dirname(file), '.').split(sep).join('/') || '.'}/schemaTypes.js`;
-  return target.startsWith('.') ? target.replace(/\.ts$/, '.js') : target;
+function finished(text, file) {
+  const up = relative(dirname(file), '.').split(sep).join('/') || '.';
+  const resolved = text.replace(specifier, (_, before, quote, target) => {
+    const found = target === 'zod' ? `${up}/schemaTypes.js` : target;
+    return before + quote + (found.startsWith('.') ? found.replace(/\.ts$/, '.js') : found) + quote;
+  });
+  if (!/\bBuffer\b/.test(resolved)) return resolved;
+  return `import type { Buffer } from '${up}/nodeTypes.js';\n${resolved}`;
 }

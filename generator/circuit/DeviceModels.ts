@@ -31,6 +31,8 @@ export const resetSwitch = {
   widthLengthRatio: 100,
   /** Gate-drain capacitance: couples the clock edge into the timing capacitor [F]. */
   gateDrain_F: 1e-12,
+  /** Drain current with the gate low, hot, at a few volts [A]. */
+  leakage_A: 100e-9,
 } as const;
 
 /** Rail-to-rail op-amp; a dual serves both places. */
@@ -47,7 +49,7 @@ export const opamp = {
   outputMargin_V: 0.1,
 } as const;
 
-/** What layout and the transistor junctions add at the timing capacitor [F], and how well it is known. */
+/** What layout and the transistor junctions add at the timing capacitor [F], and how well strays are known. */
 export const stray = { capacitance_F: 5e-12, toleranceRatio: 0.5 } as const;
 
 /** Resistance of the reset switch, its gate at `gate_V` [Ω]. */
@@ -55,7 +57,7 @@ export function switchResistance_ohm(gate_V: number): number {
   return 1 / (resetSwitch.transconductance_A_per_V2 * (gate_V - resetSwitch.threshold_V));
 }
 
-/** Everything that hangs on the timing capacitor besides itself [F]. */
+/** Everything that hangs on the timing capacitor besides itself [F]; no part of it is known well. */
 export const nodeCapacitance_F = stray.capacitance_F + opamp.inputCapacitance_F + resetSwitch.gateDrain_F;
 
 /**

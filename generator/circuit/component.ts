@@ -8,7 +8,7 @@ export function passive(
   role: string,
   nodes: readonly [string, string],
   value: number,
-  choice: { readonly series: SeriesName; readonly toleranceRatio: number; readonly rating: string },
+  choice: { readonly series: SeriesName | null; readonly toleranceRatio: number; readonly rating: string },
 ): Component {
   return { reference, package: reference, role, kind, nodes, value, model: null, fitted: true, ...choice };
 }

@@ -37,34 +37,45 @@ export function decadeOf(series: SeriesName): readonly number[] {
   return found;
 }
 
-/** Exact decimal value of a mantissa of 100 to 999 at a decade: `preferredValue(220, -12)` is 220e-12. */
-function preferredValue(mantissa: number, exponent: number): number {
-  return Number(`${mantissa}e${exponent}`);
+/** Values of a decade that begins at 10^exponent, by series and exponent. */
+const decades = new Map<string, readonly number[]>();
+
+/** Exact decimals, ascending: those of `E6` from 100e-12 begin at 100e-12, 150e-12. */
+function valuesFrom(series: SeriesName, exponent: number): readonly number[] {
+  const key = `${series} ${exponent}`;
+  const found = decades.get(key) ?? decadeOf(series).map((mantissa) => Number(`${mantissa}e${exponent - 2}`));
+  decades.set(key, found);
+  return found;
 }
+
+/** Rounding of a limit's own arithmetic that is forgiven. */
+const slack = 1e-12;
 
 /** All preferred values in a closed range, ascending. */
 export function preferredValues(series: SeriesName, low: number, high: number): number[] {
-  const first = Math.floor(Math.log10(low)) - 2;
-  const last = Math.ceil(Math.log10(high)) - 2;
+  const first = Math.floor(Math.log10(low));
+  const last = Math.ceil(Math.log10(high));
   const values: number[] = [];
-  for (let exponent = first; exponent <= last; exponent += 1)
-    for (const mantissa of decadeOf(series)) values.push(preferredValue(mantissa, exponent));
-  return values.filter((value) => value >= low * (1 - 1e-12) && value <= high * (1 + 1e-12));
+  for (let exponent = first; exponent <= last; exponent += 1) values.push(...valuesFrom(series, exponent));
+  return values.filter((value) => value >= low * (1 - slack) && value <= high * (1 + slack));
+}
+
+/** Whether a value belongs to a series, in whatever decade. */
+export function isPreferred(series: SeriesName, value: number): boolean {
+  return preferredValues(series, value, value).length > 0;
 }
 
 /** The largest preferred value that is not above `limit`. */
 export function preferredAtMost(series: SeriesName, limit: number): number {
-  return preferredValues(series, limit / 2, limit).at(-1)!;
+  const exponent = Math.floor(Math.log10(limit * (1 + slack)));
+  const below = (value: number) => value <= limit * (1 + slack);
+  // The logarithm of a power of ten may round to either side.
+  return valuesFrom(series, exponent).findLast(below) ?? valuesFrom(series, exponent - 1).findLast(below)!;
 }
 
 /** The smallest preferred value that is not below `limit`. */
 export function preferredAtLeast(series: SeriesName, limit: number): number {
-  return preferredValues(series, limit, limit * 2)[0]!;
-}
-
-/** The preferred value nearest in ratio. */
-export function preferredNearest(series: SeriesName, target: number): number {
-  const below = preferredAtMost(series, target);
-  const above = preferredAtLeast(series, target);
-  return target / below <= above / target ? below : above;
+  const exponent = Math.floor(Math.log10(limit * (1 - slack)));
+  const above = (value: number) => value >= limit * (1 - slack);
+  return valuesFrom(series, exponent).find(above) ?? valuesFrom(series, exponent + 1).find(above)!;
 }

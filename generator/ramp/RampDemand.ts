@@ -28,4 +28,6 @@ export interface RampDemand {
   readonly series: { readonly resistor: SeriesName; readonly capacitor: SeriesName };
   /** A capacitance that the designer has fixed [F]; null: free. */
   readonly capacitance_F: number | null;
+  /** The tolerance that the designer has given it; null: that of the class that is ordered. */
+  readonly capacitorToleranceRatio: number | null;
 }

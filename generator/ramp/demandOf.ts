@@ -1,4 +1,4 @@
-import { outerInterval } from '../base/Quantity.ts';
+import { outerInterval, type Quantity } from '../base/Quantity.ts';
 import type { KnownCorners } from '../law/loopCorners.ts';
 import type { Specification } from '../spec/Specification.ts';
 import type { RampDemand } from './RampDemand.ts';
@@ -40,7 +40,14 @@ export function demandOf(
     supply_V: ramp.supply_V,
     series: ramp.series,
     capacitance_F: ramp.capacitance_F?.nominal ?? null,
+    capacitorToleranceRatio: capacitorTolerance(ramp.capacitance_F),
   };
+}
+
+/** The wider side; null without a tolerance, for it is still a part that is ordered with one. */
+function capacitorTolerance(given: Quantity | null): number | null {
+  if (given === null || given.low === given.high) return null;
+  return Math.max(given.high - given.nominal, given.nominal - given.low) / given.nominal;
 }
 
 /** Period of the nominal frequency, of the middle of a range [s]. */

@@ -22,7 +22,7 @@ export function benchPlan(design: SizedDesign): TableView {
   const inputs =
     design.demand.tracks === 'input' ? [low, (low + high) / 2, high] : [design.demand.track_V.high];
   return tableView(
-    'Bench test of the first boards',
+    'Bench test of the first boards; for the rows of the ramp: power stage off, clock running, isense tied to ground',
     [
       ['probe', 'code'],
       ['conditions', 'words'],
@@ -42,7 +42,7 @@ function rampSteps(design: SizedDesign, track_V: number): Step[] {
   const figures = rampFigures(design, track_V);
   const { set_V } = currentSourceVoltages(design, track_V);
   const capacitor = worstSpread(sizing.causes.filter(({ parameter }) => parameter !== 'summing resistors'));
-  const at = `${demand.tracks === 'input' ? 'Vin' : 'reference'} ${volts(track_V)}, power stage off, clock running`;
+  const at = `${demand.tracks === 'input' ? 'Vin' : 'reference'} ${volts(track_V)}`;
   const step = (
     probe: string,
     quantity: string,
@@ -65,7 +65,7 @@ function rampSteps(design: SizedDesign, track_V: number): Step[] {
   return [
     step('set', 'voltage across R4', set_V, 'V', voltage),
     step('ramp', 'slope of the rise', figures.capacitorSlope_V_per_s, 'V/s', capacitor),
-    step('ramp', 'voltage at maximum duty, measured period nominal', figures.amplitude_V, 'V', capacitor),
+    step('ramp', 'voltage at maximum duty, nominal period', figures.amplitude_V, 'V', capacitor),
     [
       'ramp',
       at,
@@ -76,7 +76,7 @@ function rampSteps(design: SizedDesign, track_V: number): Step[] {
       '',
       '',
     ],
-    step('sense', 'slope with isense tied to ground', figures.comparatorSlope_V_per_s, 'V/s', sizing.spread),
+    step('sense', 'slope of the rise', figures.comparatorSlope_V_per_s, 'V/s', sizing.spread),
   ];
 }
 

@@ -44,15 +44,14 @@ function checkFigure(value: number | null, { unit }: DeckCheck): string {
 export function ruleTable({ rules }: Result): TableView {
   const sorted = [...rules].sort((a, b) => Number(a.passed) - Number(b.passed));
   return tableView(
-    'Rules',
+    'Every rule that applies; those that fail first',
     [
       ['rule', 'code'],
       ['severity', 'short'],
       ['measured', 'num'],
       ['limit', 'num'],
       ['verdict', 'short'],
-      ['reason', 'words'],
-      ['source', 'words'],
+      ['reason and source', 'words'],
     ],
     sorted.map(({ id, severity, measured, limit, unit, passed, reason, source }) => [
       id,
@@ -60,8 +59,7 @@ export function ruleTable({ rules }: Result): TableView {
       figure(measured, unit),
       figure(limit, unit),
       passed ? 'passes' : 'fails',
-      reason,
-      source,
+      `${reason} Source: ${source}.`,
     ]),
     (index) => (sorted[index]!.passed ? '' : sorted[index]!.severity === 'error' ? 'bad' : 'caution'),
   );

@@ -1,6 +1,6 @@
 import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import type { Result } from '../emit/resultSchema.ts';
-import { digits, figure, percent, signedPercent } from './figures.ts';
+import { digits, figure, percent } from './figures.ts';
 import { type TableView, tableView } from './table.ts';
 
 /** Bill of materials with stress and the rating to order. */
@@ -69,37 +69,24 @@ export function rampTable({ ramp, region }: Result): TableView {
   );
 }
 
-/** What else there is to know of the circuit; the spread has a table of its own. */
+/** What else there is to know of the circuit; the spread has a plot of its own. */
 export function figureTable({ circuitFigures }: Result): TableView {
   const shown = circuitFigures.filter(({ id }) => !/spread, (low|high) side/.test(id));
+  const sources = [...new Set(shown.map(({ source }) => source))];
+  const isOneSource = sources.length === 1;
   return tableView(
-    'Figures of the circuit',
+    isOneSource ? `Figures of the circuit, ${sources[0]}` : 'Figures of the circuit',
     [
       ['figure', 'words'],
       ['value', 'num'],
       ['limit', 'num'],
-      ['source', 'words'],
+      ...(isOneSource ? [] : [['source', 'words'] as const]),
     ],
-    shown.map(({ id, value, unit, limit, source }) => [id, figure(value, unit), figure(limit, unit), source]),
-  );
-}
-
-/** How the ramp's own spread adds up: every cause at its worst at once. */
-export function spreadTable({ sizing }: SizedDesign): TableView {
-  const { causes, spread } = sizing;
-  const counted = causes.filter(({ low, high }) => low !== 0 || high !== 0);
-  const sorted = [...counted].sort((a, b) => a.low - b.low);
-  return tableView(
-    'How the spread of the ramp is composed: extreme values, multiplied',
-    [
-      ['cause', 'words'],
-      ['low', 'num'],
-      ['high', 'num'],
-    ],
-    [
-      ...sorted.map(({ parameter, low, high }) => [parameter, signedPercent(low), signedPercent(high)]),
-      ['all at once', signedPercent(spread.low - 1, 3), signedPercent(spread.high - 1, 3)],
-    ],
-    (index) => (index === sorted.length ? 'total' : ''),
+    shown.map(({ id, value, unit, limit, source }) => [
+      id,
+      figure(value, unit),
+      figure(limit, unit),
+      ...(isOneSource ? [] : [source]),
+    ]),
   );
 }

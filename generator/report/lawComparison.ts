@@ -34,6 +34,23 @@ export function capital(text: string): string {
   return `${text.charAt(0).toUpperCase()}${text.slice(1)}`;
 }
 
+/** What the comparison comes to, and for whom the other law would do. */
+export function lawAdvice(design: SizedDesign): readonly string[] {
+  const [adaptive, fixed] = bothLaws(design).map(({ extremes }) => extremes.max.dampingIndex) as [
+    number,
+    number,
+  ];
+  return [
+    costSentence(design),
+    fixed <= adaptive * (1 + alike)
+      ? 'Over these outputs the slope that is needed hardly depends on the input, and a constant ramp is close to deadbeat everywhere. Following the input is for outputs that are not known or set by others, up towards the input.'
+      : 'The output may stand so close to the input that the slope needed grows with the input: a constant ramp, sized where it is needed most, is too much elsewhere.',
+    design.chosen.law.kind === 'fixed'
+      ? 'This ramp needs nothing but a reference; the same block fed from the input makes the adaptive one.'
+      : 'This ramp needs nothing but the input; the same block fed from a reference makes the fixed one.',
+  ];
+}
+
 /** The same figures for both laws, side by side. */
 export function comparisonTable(design: SizedDesign): TableView {
   const laws = bothLaws(design);

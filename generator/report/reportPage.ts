@@ -7,16 +7,19 @@ import type { Waveforms } from '../spice/Deck.ts';
 import { benchPlan } from './benchPlan.ts';
 import { cautions } from './cautions.ts';
 import type { Chart } from './chart/Chart.ts';
-import { type Format, formats, layOutChart } from './chart/layOutChart.ts';
+import { type Format, formats } from './chart/formats.ts';
+import { type BarChart, layOutBars } from './chart/layOutBars.ts';
+import { layOutChart } from './chart/layOutChart.ts';
 import { legendView } from './chart/legendView.ts';
 import { ruleTable, simulationTable } from './checkTables.ts';
-import { figureTable, partsTable, portTable, rampTable, spreadTable } from './circuitTables.ts';
+import { figureTable, partsTable, portTable, rampTable } from './circuitTables.ts';
 import { currentCharts, worstDeck } from './currentCharts.ts';
 import { dampingChart } from './dampingChart.ts';
-import { comparisonTable, costSentence } from './lawComparison.ts';
+import { comparisonTable, lawAdvice } from './lawComparison.ts';
 import { rampCharts } from './rampCharts.ts';
 import { assumptionTable, cornerTable, regionSentences, requirementTable } from './regionTables.ts';
 import { reproduction } from './reproduction.ts';
+import { spreadChart } from './spreadChart.ts';
 import { summaryOf } from './summary.ts';
 import { titleBlock } from './titleBlock.ts';
 import { worstCornerTable } from './worstCorner.ts';
@@ -43,7 +46,7 @@ export async function reportPage({ design, result, waveforms }: ReportInput): Pr
     region: regionSentences(design),
     corners: cornerTable(result),
     damping: figureViews(dampingChart(design, result), formats.wide),
-    cost: costSentence(design),
+    advice: lawAdvice(design),
     comparison: comparisonTable(design),
     ramps: rampCharts(design, waveforms?.get('ramp-test.cir')).map((chart) =>
       figureViews(chart, formats.half),
@@ -52,7 +55,7 @@ export async function reportPage({ design, result, waveforms }: ReportInput): Pr
     parts: partsTable(result),
     ports: portTable(design),
     figures: figureTable(result),
-    spread: spreadTable(design),
+    spread: barsView(spreadChart(design)),
     currents: currentCharts(design, waveforms?.get(worstDeck(design))).map((chart) =>
       figureViews(chart, formats.half),
     ),
@@ -62,7 +65,7 @@ export async function reportPage({ design, result, waveforms }: ReportInput): Pr
     assumptions: assumptionTable(result),
     bench: benchPlan(design),
     cautions: cautions(design),
-    reproduction: await reproduction(result),
+    reproduction: await reproduction(design, result),
     titleBlock: titleBlock(design),
   });
 }
@@ -73,5 +76,13 @@ function figureViews(chart: Chart, format: Format) {
     title: chart.title,
     formats: [layOutChart(chart, format), layOutChart(chart, formats.narrow)],
     legend: legendView(chart),
+  };
+}
+
+function barsView(chart: BarChart) {
+  return {
+    title: chart.title,
+    formats: [layOutBars(chart, formats.half), layOutBars(chart, formats.narrow)],
+    legend: [],
   };
 }

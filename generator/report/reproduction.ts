@@ -1,31 +1,37 @@
+import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import type { Result } from '../emit/resultSchema.ts';
 import { jsonDocument } from '../emit/text/jsonDocument.ts';
+import { specificationText } from './specificationText.ts';
 import { toolVersion } from './toolVersion.ts';
 
 export interface ReproductionView {
   readonly computedBy: string;
   readonly digest: string;
+  /** What was given, as a file that comes to the same specification. */
+  readonly specification: string;
   readonly commands: readonly { readonly line: string; readonly does: string }[];
 }
 
 /** How to come to the same files again; the digest is that of the specification as result.json has it. */
-export async function reproduction({ specification, simulation }: Result): Promise<ReproductionView> {
+export async function reproduction({ request }: SizedDesign, result: Result): Promise<ReproductionView> {
+  const { specification, simulation } = result;
   const engine = simulation === null ? 'none' : simulation.engine;
   return {
     computedBy: `counterslope ${toolVersion}`,
     digest: await sha256Hex(jsonDocument(specification)),
+    specification: specificationText(request),
     commands: [
       {
-        line: `counterslope design SPEC --engine ${engine} --out DIR`,
-        does: 'designs again, from the specification',
+        line: `counterslope design spec.json --engine ${engine} --out ramp`,
+        does: 'designs the same again, spec.json holding the lines above',
       },
       {
         line: 'counterslope simulate .',
-        does: "runs this folder's decks again and compares with result.json",
+        does: 'in the folder of this page: runs its decks again and compares with result.json',
       },
       {
         line: `node -p "JSON.stringify(require('./result.json').specification, null, 2)" | sha256sum`,
-        does: 'gives the digest of the specification',
+        does: 'gives the digest in the title block',
       },
     ],
   };

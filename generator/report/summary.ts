@@ -33,19 +33,23 @@ function overallStanding(
   design: SizedDesign,
   { rules, simulation, stability: { dampingIndexMin } }: Result,
 ): string {
-  const { goal } = design.request.specification;
   const broken = rules.some(({ severity, passed }) => severity === 'error' && !passed);
   if (dampingIndexMin <= 0.5 || broken || simulation?.passed === false) return 'bad';
-  return dampingIndexMin < goal.dampingIndex * (1 - 1e-9) ? 'caution' : 'good';
+  return isBelowGoal(design, dampingIndexMin) ? 'caution' : 'good';
 }
 
-function verdict(design: SizedDesign, { stability: { dampingIndexMin: least } }: Result): string {
-  const { goal } = design.request.specification;
-  const where = reach(design);
+function verdict(design: SizedDesign, { stability: { dampingIndexMin: least, at } }: Result): string {
+  const goal = design.request.specification.goal.dampingIndex;
+  const place = `${volts(at.inputVoltage_V)} in and ${percent(at.dutyRatio)} duty`;
   if (least <= 0.5)
-    return `Not stable ${where}: the damping index falls to ${plainNumber(least)}, the edge is ½.`;
-  const aim = least < goal.dampingIndex * (1 - 1e-9) ? 'below the goal of' : 'goal';
-  return `Stable ${where}: the damping index is at least ${plainNumber(least)}, ${aim} ${plainNumber(goal.dampingIndex)}.`;
+    return `Not stable ${reach(design)}: the damping index falls to ${plainNumber(least)} at ${place}; ½ is the edge.`;
+  const aim = isBelowGoal(design, least) ? 'below the goal of' : 'goal';
+  return `Stable ${reach(design)}: damping index at least ${plainNumber(least)} (${aim} ${plainNumber(goal)}), least at ${place}.`;
+}
+
+/** The least gain meets the goal exactly; the margin is for rounding in the last digits. */
+function isBelowGoal({ request }: SizedDesign, index: number): boolean {
+  return index < request.specification.goal.dampingIndex * (1 - 1e-9);
 }
 
 function reach({ region }: SizedDesign): string {
@@ -58,7 +62,7 @@ export function pointText({ inputVoltage_V, outputVoltage_V, dutyRatio }: WorstP
   return `${volts(inputVoltage_V)} in${output}, duty ${percent(dutyRatio)}`;
 }
 
-function stability({ request }: SizedDesign, { stability: figures }: Result): Answer {
+function stability(design: SizedDesign, { stability: figures }: Result): Answer {
   const {
     dampingIndexMin: least,
     dampingIndexMax: most,
@@ -71,12 +75,7 @@ function stability({ request }: SizedDesign, { stability: figures }: Result): An
     settlingCyclesMax === null ? '' : ` A disturbance is down to 1 % within ${settlingCyclesMax} cycles.`;
   return {
     question: 'Damping',
-    standing:
-      least <= 0.5
-        ? 'bad'
-        : least < request.specification.goal.dampingIndex * (1 - 1e-9)
-          ? 'caution'
-          : 'good',
+    standing: least <= 0.5 ? 'bad' : isBelowGoal(design, least) ? 'caution' : 'good',
     sentences: [
       `Least x ${plainNumber(least)} at ${pointText(at)}: cycle ratio ${plainNumber(cycleRatioMin)}.`,
       `Greatest x ${plainNumber(most)} at ${pointText(atMax)}.${settles}`,

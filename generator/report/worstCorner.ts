@@ -103,7 +103,7 @@ function circuitLines(design: SizedDesign): Line[] {
     [
       'greatest ramp amplitude',
       `${top} tracked, maximum duty at the lowest frequency, ramp ${percent(sizing.spread.high, 4)}`,
-      'A = dV/dt · t_rise · spread',
+      'A = slope · rise time · spread',
       `${figure(figures.capacitorSlope_V_per_s, 'V/s', 4)} · ${figure(demand.riseTime_s, 's', 4)} · ${digits(sizing.spread.high, 4)}`,
       figure(sizing.amplitude_V * sizing.spread.high, 'V'),
       `≤ ${figure(sizing.headroom.ramp_V, 'V')}`,
@@ -112,7 +112,7 @@ function circuitLines(design: SizedDesign): Line[] {
     [
       'time to reset to 1 %',
       `supply ${figure(demand.supply_V.low, 'V')}, highest frequency`,
-      't = overhead + ln 100 · Ron · C',
+      't = edges + ln 100 · Ron·C',
       `10 ns + 4.605 · ${figure(switch_ohm, 'Ω')} · ${figure(sizing.totalCapacitance_F, 'F')}`,
       figure(reset, 's'),
       `≤ ${figure(demand.resetTime_s, 's')}`,
@@ -121,7 +121,7 @@ function circuitLines(design: SizedDesign): Line[] {
     [
       'least collector-emitter voltage of Q1',
       `${top} tracked, supply ${figure(demand.supply_V.low, 'V')}, cold`,
-      'V_CE = Vcc − V_RE − V_EB − V_set',
+      'VCE = Vcc − VRE − VEB − Vset',
       `${[demand.supply_V.low, source.degeneration_V, bipolar.baseEmitterHigh_V, source.set_V].map((value) => digits(value, 3)).join(' − ')} V`,
       figure(least_V, 'V'),
       `≥ ${figure(bipolar.saturation_V, 'V')}`,
@@ -130,7 +130,7 @@ function circuitLines(design: SizedDesign): Line[] {
     [
       'greatest reset residual',
       `${top} tracked, nominal supply`,
-      'V = I · Ron + A · e^(−t/(Ron·C))',
+      'V = I·Ron + A·exp(−t/(Ron·C))',
       `${figure(figures.chargingCurrent_A, 'A')} · ${figure(switchResistance_ohm(demand.supply_V.nominal), 'Ω')} + rest`,
       figure(figures.residual_V, 'V'),
       `≤ ${figure(figures.amplitude_V / 100, 'V')}`,

@@ -1,5 +1,5 @@
 import { outerInterval } from '../base/Quantity.ts';
-import { resetTimeNeeded_s } from '../circuit/boardOpamp/refusals.ts';
+import { resetTimeNeeded_s } from '../circuit/boardOpamp/resetTime.ts';
 import { bipolar, followerLag_s, nodeCapacitance_F, opamp } from '../circuit/DeviceModels.ts';
 import { currentSourceVoltages, rampFigures, senseAttenuation } from '../circuit/rampFigures.ts';
 import type { SizedDesign } from '../circuit/SizedDesign.ts';

@@ -1,5 +1,6 @@
 import { engineering } from '../../base/engineering.ts';
 import { resistorTolerance, timingCapacitorTolerance } from '../../parts/catalogue.ts';
+import { isPreferred } from '../../parts/eSeries.ts';
 import type { RampDemand } from '../../ramp/RampDemand.ts';
 import type { Circuit, Component } from '../Circuit.ts';
 import { passive, semiconductor, strayCapacitor } from '../component.ts';
@@ -146,8 +147,8 @@ function currentSource(sizing: BoardOpampSizing, demand: RampDemand): Component[
 function rampNode(sizing: BoardOpampSizing, demand: RampDemand): Component[] {
   return [
     passive('capacitor', 'C1', 'timing capacitor', ['ramp', '0'], sizing.capacitance_F, {
-      series: demand.series.capacitor,
-      toleranceRatio: timingCapacitorTolerance,
+      series: isPreferred(demand.series.capacitor, sizing.capacitance_F) ? demand.series.capacitor : null,
+      toleranceRatio: demand.capacitorToleranceRatio ?? timingCapacitorTolerance,
       rating: 'C0G (0 ± 30 ppm/K), order ≥ 25 V',
     }),
     strayCapacitor(

@@ -36,11 +36,12 @@ export function currentPerVolt(divider: Divider, set_ohm: number): number {
 }
 
 /**
- * The set of parts that follows from a timing capacitor and a set resistor; null where a bound is broken.
+ * The set of parts that follows from a timing capacitor and a set resistor.
  *
  *   dV_C/dt per volt = d·M/(R_set·C),  referred to the sense element: × R_sense/R_ramp
  *
- * The ramp resistor is rounded down, to the steeper and so the stable side.
+ * The ramp resistor is rounded down, to the steeper and so the stable side. Whether the set is any good
+ * its bounds say.
  */
 export function candidate(
   demand: RampDemand,
@@ -48,7 +49,7 @@ export function candidate(
   room: Headroom,
   capacitance_F: number,
   set_ohm: number,
-): BoardOpampSizing | null {
+): BoardOpampSizing {
   const totalCapacitance_F = capacitance_F + nodeCapacitance_F;
   const perVolt = currentPerVolt(divider, set_ohm);
   const chargingCurrent_A = perVolt * demand.track_V.high;
@@ -56,29 +57,24 @@ export function candidate(
   const amplitude_V = capacitorSlope_per_s * demand.track_V.high * demand.riseTime_s;
   const setCurrent_A = (divider.ratio * demand.track_V.high) / set_ohm;
   const degeneration_ohm = preferredAtMost(demand.series.resistor, room.degeneration_V / setCurrent_A);
+  const span = demand.track_V.low / demand.track_V.high;
   const causes = spreadCauses(demand, {
     capacitance_F,
     totalCapacitance_F,
     dividerRatio: divider.ratio,
+    dividerSource_ohm: divider.source_ohm,
     setVoltageLow_V: divider.ratio * demand.track_V.low,
-    degenerationLow_V: ((degeneration_ohm * setCurrent_A) / demand.track_V.high) * demand.track_V.low,
+    degenerationLow_V: degeneration_ohm * setCurrent_A * span,
+    chargingCurrentLow_A: chargingCurrent_A * span,
   });
   const spread = worstSpread(causes);
-  const wantedSlope_per_s = demand.givenSlope_per_s ?? demand.requiredSlope_per_s / spread.low;
+  const wantedSlope_per_s =
+    demand.givenSlope_per_s ?? demand.requiredSlope_per_s / Math.max(spread.low, limits.spreadLow);
   const summing_ohm = preferredAtMost(
     demand.series.resistor,
     (limits.senseResistor_ohm * capacitorSlope_per_s) / wantedSlope_per_s,
   );
   const senseSlope_per_s = (capacitorSlope_per_s * limits.senseResistor_ohm) / summing_ohm;
-  const amplitudeLimit_V = room.ramp_V / spread.high;
-  const within =
-    amplitude_V <= amplitudeLimit_V &&
-    amplitude_V >= limits.amplitudeShareLow * room.ramp_V &&
-    chargingCurrent_A <= limits.chargingCurrentHigh_A &&
-    (chargingCurrent_A * demand.track_V.low) / demand.track_V.high >= limits.chargingCurrentLow_A &&
-    summing_ohm >= limits.summingRatioLow * limits.senseResistor_ohm &&
-    summing_ohm <= limits.summingResistorHigh_ohm;
-  if (!within) return null;
   return {
     divider,
     headroom: room,
@@ -97,7 +93,7 @@ export function candidate(
     amplitude_V,
     cost: cost(
       senseSlope_per_s / wantedSlope_per_s - 1,
-      amplitude_V / amplitudeLimit_V,
+      (amplitude_V * spread.high) / room.ramp_V,
       capacitance_F,
       chargingCurrent_A,
     ),

@@ -21,7 +21,11 @@ export function headroom({ supply_V, track_V }: RampDemand): Headroom {
   const below = supply_V.low - degeneration_V - bipolar.saturation_V;
   return {
     degeneration_V,
-    setVoltage_V: Math.min(limits.setVoltageHigh_V, below - bipolar.baseEmitterHigh_V, 0.8 * track_V.high),
+    setVoltage_V: Math.min(
+      limits.setVoltageHigh_V,
+      below - bipolar.baseEmitterHigh_V,
+      limits.dividerRatioHigh * track_V.high,
+    ),
     ramp_V: Math.min(below, supply_V.low - opamp.outputMargin_V),
   };
 }

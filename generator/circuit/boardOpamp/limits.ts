@@ -14,6 +14,8 @@ export const limits = {
   degenerationShare: 0.2,
   /** Highest voltage across the set resistor: more gains no accuracy [V]. */
   setVoltageHigh_V: 2,
+  /** Highest share of the tracked voltage that the divider passes on. */
+  dividerRatioHigh: 0.8,
   /** Lowest of it at the highest input: less drowns in the op-amp's offset [V]. */
   setVoltageLow_V: 0.4,
   /** Current through the divider at the highest input [A]. */
@@ -26,6 +28,10 @@ export const limits = {
   summingResistorHigh_ohm: 1e6,
   /** Least amplitude on the timing capacitor as a share of the greatest possible. */
   amplitudeShareLow: 0.1,
+  /** What the reset switch's gate must have above its threshold [V]. */
+  gateOverdrive_V: 0.5,
+  /** Least that the worst unit may deliver of the nominal slope. */
+  spreadLow: 0.5,
   /** Clock edges and propagation that the reset must have besides its time constants [s]. */
   resetOverhead_s: 10e-9,
 } as const;

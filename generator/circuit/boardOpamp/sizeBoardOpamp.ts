@@ -3,15 +3,16 @@ import { preferredValues } from '../../parts/eSeries.ts';
 import type { RampDemand } from '../../ramp/RampDemand.ts';
 import type { ReadSpecification } from '../../spec/readSpecification.ts';
 import { nodeCapacitance_F } from '../DeviceModels.ts';
+import { boundsOf, isBroken } from './bounds.ts';
 import { type BoardOpampSizing, candidate, currentPerVolt } from './candidate.ts';
 import { chooseDivider, type Divider } from './divider.ts';
 import { type Headroom, headroom } from './headroom.ts';
 import { limits } from './limits.ts';
-import { refusals } from './refusals.ts';
+import { refusals, refuseNearest } from './refusals.ts';
 
 /**
  * The best set of standard parts for a demand: every timing capacitor of its series with every set
- * resistor that keeps currents and amplitude within bounds, the ramp resistor following from both.
+ * resistor that keeps the amplitude within bounds, the ramp resistor following from both.
  *
  * @returns the set of least cost, or the inequalities that no set meets (code `no-circuit`)
  */
@@ -20,13 +21,14 @@ export function sizeBoardOpamp(demand: RampDemand, request: ReadSpecification): 
   const refused = refusals(demand, room, request);
   if (refused.length > 0) return failure(refused);
   const divider = chooseDivider(demand, room.setVoltage_V);
-  const found = timingCapacitors(demand).flatMap((capacitance_F) =>
-    setResistors(demand, divider, room, capacitance_F).flatMap(
-      (set_ohm) => candidate(demand, divider, room, capacitance_F, set_ohm) ?? [],
+  const sets = timingCapacitors(demand).flatMap((capacitance_F) =>
+    setResistors(demand, divider, room, capacitance_F).map((set_ohm) =>
+      candidate(demand, divider, room, capacitance_F, set_ohm),
     ),
   );
-  if (found.length === 0) return failure(refusals(demand, room, request, divider));
-  return success(found.reduce((a, b) => (b.cost < a.cost ? b : a)));
+  const sound = sets.filter((set) => !boundsOf(demand, set).some(isBroken));
+  if (sound.length === 0) return failure(refuseNearest(demand, sets, request));
+  return success(sound.reduce((a, b) => (b.cost < a.cost ? b : a)));
 }
 
 export function timingCapacitors(demand: RampDemand): readonly number[] {

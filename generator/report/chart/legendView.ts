@@ -1,9 +1,10 @@
 import type { Chart, LegendEntry } from './Chart.ts';
+import { cross, ring } from './markViews.ts';
 
 const strokes: Readonly<Record<LegendEntry['mark'], string>> = {
-  line: 'M1 6H33',
-  rings: 'M13 6a4 4 0 1 0 8 0a4 4 0 1 0 -8 0Z',
-  crosses: 'M12 6h10M17 1v10',
+  line: 'M1 9H33',
+  rings: ring([17, 9]),
+  crosses: cross([17, 9]),
 };
 const classes: Readonly<Record<LegendEntry['mark'], string>> = {
   line: 'line',
@@ -12,7 +13,7 @@ const classes: Readonly<Record<LegendEntry['mark'], string>> = {
 };
 
 /** The keys below a plot: a stroke of each kind with its meaning. */
-export function legendView({ legend }: Chart) {
+export function legendView({ legend }: Pick<Chart, 'legend'>) {
   return legend.map(({ mark, ink, text }) => ({
     d: strokes[mark],
     className: `${classes[mark]} ${ink}`,

@@ -1,0 +1,156 @@
+import { balance } from './balance.ts';
+import type { LinearInterval, LinearStage } from './CycleRun.ts';
+import type { Motion, Watched } from './Motion.ts';
+
+/** Times nearer than this share of the range are one. */
+const resolution = 4e-16;
+/** Relative size of the first term of the series that is left out. */
+const truncation = 1e-18;
+
+type Rows = Readonly<Record<Watched | 'negative', Float64Array>>;
+
+/**
+ * States that obey dx/dt = A·x + b, moved exactly.
+ *
+ *   x(t) = x0 + Σ A^(k−1)·(A·x0 + b)·t^k/k!
+ *
+ * summed to rounding over stretches of at most 1/‖A‖, so that it holds for any A: stiff, singular,
+ * oscillating, or with eigenvalues that coincide. The norm is taken after balancing, because states of
+ * different units cannot be compared.
+ */
+export function linearMotion(stage: LinearStage, interval: LinearInterval): Motion {
+  const size = interval.source.length;
+  const matrix = Float64Array.from(interval.matrix.flat());
+  const source = Float64Array.from(interval.source);
+  const { norm_per_s: norm, weights } = balance(interval.matrix);
+  const rows = watchedRows(stage, size);
+  const restartLevel_A_per_s = -(stage.off.source[0] ?? 0);
+  const slopes = new Float64Array(size);
+  const term = new Float64Array(size);
+  const next = new Float64Array(size);
+  const probe = new Float64Array(size);
+  const unread = new Float64Array(size);
+
+  /** A·x + b into `slopes`. */
+  function differentiate(state: Float64Array): void {
+    for (let row = 0; row < size; row += 1) {
+      let sum = source[row]!;
+      for (let column = 0; column < size; column += 1) sum += matrix[row * size + column]! * state[column]!;
+      slopes[row] = sum;
+    }
+  }
+
+  /** One stretch of the series; the integral is that of the same series. */
+  function stretch(state: Float64Array, time: number, integral: Float64Array): void {
+    differentiate(state);
+    for (let row = 0; row < size; row += 1) {
+      term[row] = slopes[row]! * time;
+      integral[row]! += state[row]! * time + (term[row]! * time) / 2;
+      state[row]! += term[row]!;
+    }
+    const reach = norm * time;
+    let bound = 1;
+    for (let order = 2; bound > truncation; order += 1) {
+      bound *= reach / order;
+      for (let row = 0; row < size; row += 1) {
+        let sum = 0;
+        for (let column = 0; column < size; column += 1) sum += matrix[row * size + column]! * term[column]!;
+        next[row] = (sum * time) / order;
+      }
+      for (let row = 0; row < size; row += 1) {
+        term[row] = next[row]!;
+        state[row]! += term[row]!;
+        integral[row]! += (term[row]! * time) / (order + 1);
+      }
+    }
+  }
+
+  function advance(state: Float64Array, time: number, integral: Float64Array): void {
+    if (!(time > 0)) return;
+    const stretches = Math.max(1, Math.ceil(norm * time));
+    for (let count = 0; count < stretches; count += 1) stretch(state, time / stretches, integral);
+  }
+
+  /**
+   * First time at which row·x + slope·t ≥ level.
+   *
+   * From the left by f + f′τ + Mτ²/2 = 0, M ≥ |f″| over the next 1/‖A‖: Newton's method that never steps
+   * over the first root, and converges as fast.
+   */
+  function reach(
+    state: Float64Array,
+    row: Float64Array,
+    slope: number,
+    level: number,
+    from: number,
+    to: number,
+  ): number {
+    probe.set(state);
+    advance(probe, from, unread);
+    const rowNorm = dualNorm(row, weights);
+    for (let time = from; ; ) {
+      const short = level - slope * time - dot(row, probe);
+      if (short <= 0) return time;
+      differentiate(probe);
+      const steepness = dot(row, slopes) + slope;
+      const bend = rowNorm * norm * Math.E * weightedNorm(slopes, weights);
+      const step = Math.min(
+        (2 * short) / (steepness + Math.sqrt(steepness * steepness + 2 * bend * short)),
+        1 / norm,
+        to - time,
+      );
+      if (time >= to) return Number.POSITIVE_INFINITY;
+      if (time + step <= time || step <= resolution * to) return step < to - time ? time : to;
+      advance(probe, step, unread);
+      time += step;
+    }
+  }
+
+  return {
+    advance,
+    timeToReach(state, watched, slope, level, from, to) {
+      const wanted = watched === 'restart' ? restartLevel_A_per_s : level;
+      return reach(state, rows[watched], slope, wanted, from, to);
+    },
+    timeToZero(state, to) {
+      differentiate(state);
+      if (state[0]! <= 0 && slopes[0]! <= 0) return 0;
+      const from = state[0]! <= 0 ? firstRise : 0;
+      return reach(state, rows.negative, 0, 0, from * to, to);
+    },
+  };
+}
+
+/** A current that leaves zero is looked at again after this share of the time. */
+const firstRise = 1e-9;
+
+function watchedRows(stage: LinearStage, size: number): Rows {
+  const unit = (sign: number) => Float64Array.from({ length: size }, (_, state) => (state === 0 ? sign : 0));
+  return {
+    trip: Float64Array.from(stage.trip),
+    current: unit(1),
+    negative: unit(-1),
+    restart: Float64Array.from(stage.off.matrix[0]!),
+  };
+}
+
+function dot(row: Float64Array, column: Float64Array): number {
+  let sum = 0;
+  for (let place = 0; place < row.length; place += 1) sum += row[place]! * column[place]!;
+  return sum;
+}
+
+/** Largest |x|/weight. */
+function weightedNorm(column: Float64Array, weights: Float64Array): number {
+  let largest = 0;
+  for (let place = 0; place < column.length; place += 1)
+    largest = Math.max(largest, Math.abs(column[place]!) / weights[place]!);
+  return largest;
+}
+
+/** Σ |row|·weight: |row·x| ≤ this times the norm above. */
+function dualNorm(row: Float64Array, weights: Float64Array): number {
+  let sum = 0;
+  for (let place = 0; place < row.length; place += 1) sum += Math.abs(row[place]!) * weights[place]!;
+  return sum;
+}
