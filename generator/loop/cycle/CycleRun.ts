@@ -53,7 +53,7 @@ export interface CycleSettings {
   readonly rampPerOutputVolt_A_per_Vs: number;
   /** A ramp that the controller adds besides [A/s]. */
   readonly internalSlope_A_per_s: number;
-  /** The current at which the comparator would trip without a ramp [A]. */
+  /** The current at which the comparator would trip without a ramp [A]; infinite: the limit alone decides. */
   readonly control_A: number;
   readonly limit: CurrentLimit | null;
 }

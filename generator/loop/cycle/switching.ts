@@ -110,7 +110,9 @@ export function runCycle(
 function decide(circuit: Switching, state: Float64Array, outcome: CycleOutcome): void {
   const { on, settings, blanked_s, latest_s, delay_s } = circuit;
   const slope = rampSlope(circuit, state);
-  let trip = on.timeToReach(state, 'trip', slope, settings.control_A, blanked_s, latest_s);
+  const level = settings.control_A;
+  let trip = Number.POSITIVE_INFINITY;
+  if (level !== trip) trip = on.timeToReach(state, 'trip', slope, level, blanked_s, latest_s);
   let ending: number = endings.comparator;
   const { limit } = settings;
   if (limit !== null) {

@@ -1,4 +1,5 @@
 import type { CycleRun, IdealOutputStage } from '../../../../generator/loop/cycle/CycleRun.ts';
+import type { CapacitorStageElements } from '../../../../generator/loop/cycle/capacitorStage.ts';
 
 /** 2 µs, no delay, no blanking, current in both directions. */
 export const plainTiming = {
@@ -27,6 +28,27 @@ export function buckRun(overrides: Partial<CycleRun> = {}): CycleRun {
     timing: plainTiming,
     cycles: 50,
     initial: [2],
+    ...overrides,
+  };
+}
+
+/** 12 V in, 10 µH, 22 µF, 4 mΩ, load of 1.7 Ω; losses only where given. */
+export function capacitorElements(
+  kind: CapacitorStageElements['kind'],
+  overrides: Partial<CapacitorStageElements> = {},
+): CapacitorStageElements {
+  return {
+    kind,
+    inputVoltage_V: 12,
+    rectifierDrop_V: 0,
+    inductance_H: 10e-6,
+    capacitance_F: 22e-6,
+    seriesResistance_ohm: 4e-3,
+    switch_ohm: 0,
+    winding_ohm: 0,
+    rectifier_ohm: 0,
+    loadConductance_S: 1 / 1.7,
+    loadCurrent_A: 0,
     ...overrides,
   };
 }

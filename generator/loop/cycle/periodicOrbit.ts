@@ -1,0 +1,120 @@
+import type { CycleRecord, CycleRun } from './CycleRun.ts';
+import { runCycles } from './runCycles.ts';
+import { solveLinear } from './solveLinear.ts';
+
+/** What the control level is to be found for. */
+export type Wanted =
+  | { readonly quantity: 'peak'; readonly value: number }
+  /** Mean over a cycle of one state: 0 the inductor current [A], 1 a capacitor's voltage [V]. */
+  | { readonly quantity: 'mean'; readonly state: number; readonly value: number };
+
+/** A cycle that ends as it began, stable or not. */
+export interface PeriodicOrbit {
+  readonly state: readonly number[];
+  readonly control_A: number;
+  /** That one cycle. */
+  readonly cycle: CycleRecord;
+}
+
+const iterations = 60;
+const halvings = 30;
+/** Relative to the largest of state and control. */
+const converged = 2e-14;
+/** Of the unknown it moves: the error of a central difference is its square. */
+const differenceStep = 1e-5;
+/** Cycles run before another attempt where the first does not converge: a stable orbit draws them in. */
+const warmUps = [0, 50, 1000, 20_000];
+
+/**
+ * The periodic orbit that Newton's method finds from the run's initial state and control level.
+ *
+ * Solves x(T) − x(0) = 0, and with `wanted` the control level too. Events do not count.
+ * @returns null where there is none to be found: no orbit of one cycle reaches what is wanted
+ */
+export function periodicOrbit(run: CycleRun, wanted?: Wanted): PeriodicOrbit | null {
+  for (const cycles of warmUps) {
+    const warmed = cycles === 0 ? run.initial : lastState(runCycles({ ...run, cycles, events: [] }));
+    const start = wanted === undefined ? [...warmed] : [...warmed, run.control_A];
+    const found = newton((unknowns) => residual(run, wanted, unknowns), start);
+    if (found !== null) return orbitOf(run, wanted, found);
+  }
+  return null;
+}
+
+function lastState({ edges, onTime_s }: CycleRecord): number[] {
+  return edges.map((column) => column[onTime_s.length]!);
+}
+
+function oneCycle(run: CycleRun, wanted: Wanted | undefined, unknowns: readonly number[]): CycleRecord {
+  const initial = unknowns.slice(0, run.initial.length);
+  const control_A = wanted === undefined ? run.control_A : unknowns.at(-1)!;
+  return runCycles({ ...run, initial, control_A, cycles: 1, events: [] });
+}
+
+function orbitOf(run: CycleRun, wanted: Wanted | undefined, unknowns: readonly number[]): PeriodicOrbit {
+  return {
+    state: unknowns.slice(0, run.initial.length),
+    control_A: wanted === undefined ? run.control_A : unknowns.at(-1)!,
+    cycle: oneCycle(run, wanted, unknowns),
+  };
+}
+
+function residual(run: CycleRun, wanted: Wanted | undefined, unknowns: readonly number[]): number[] {
+  const cycle = oneCycle(run, wanted, unknowns);
+  const moved = lastState(cycle).map((value, place) => value - unknowns[place]!);
+  if (wanted === undefined) return moved;
+  const reached = wanted.quantity === 'peak' ? cycle.peak_A[0]! : cycle.means[wanted.state]![0]!;
+  return [...moved, reached - wanted.value];
+}
+
+/** Damped by halving wherever a full step does not bring the residual down. */
+function newton(evaluate: (unknowns: readonly number[]) => number[], start: number[]): number[] | null {
+  let unknowns = start;
+  let missed = evaluate(unknowns);
+  for (let iteration = 0; iteration < iterations; iteration += 1) {
+    const scale = Math.max(...unknowns.map(Math.abs), Number.MIN_VALUE);
+    const step = solveLinear(differences(evaluate, unknowns, scale), missed);
+    if (step === null || !step.every(Number.isFinite)) return null;
+    const better = downhill(evaluate, unknowns, step, missed);
+    if (Math.max(...step.map(Math.abs)) <= converged * scale || better === null)
+      return size(missed) <= 1e3 * converged * scale ? unknowns : null;
+    unknowns = better.unknowns;
+    missed = better.missed;
+  }
+  return null;
+}
+
+function downhill(
+  evaluate: (unknowns: readonly number[]) => number[],
+  from: readonly number[],
+  step: readonly number[],
+  missed: readonly number[],
+) {
+  for (let share = 1; share > 2 ** -halvings; share /= 2) {
+    const unknowns = from.map((value, place) => value - share * step[place]!);
+    const left = evaluate(unknowns);
+    if (size(left) < size(missed)) return { unknowns, missed: left };
+  }
+  return null;
+}
+
+/** Jacobian by central differences: rows of residuals, columns of unknowns. */
+export function differences(
+  evaluate: (unknowns: readonly number[]) => number[],
+  at: readonly number[],
+  scale: number,
+  share = differenceStep,
+): number[][] {
+  const columns = at.map((value, place) => {
+    const step = share * Math.max(Math.abs(value), 1e-3 * scale);
+    const beside = (sign: number) => evaluate(at.map((x, other) => (other === place ? x + sign * step : x)));
+    const above = beside(1);
+    const below = beside(-1);
+    return above.map((high, row) => (high - below[row]!) / (2 * step));
+  });
+  return columns[0]!.map((_, row) => columns.map((column) => column[row]!));
+}
+
+function size(values: readonly number[]): number {
+  return Math.max(...values.map(Math.abs));
+}
