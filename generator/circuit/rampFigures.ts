@@ -16,7 +16,7 @@ export interface RampFigures {
 }
 
 /** Share of the current signal that the summing network lets through: Rramp/(Rramp + Rsense). */
-export function senseAttenuation({ sizing }: SizedDesign): number {
+export function senseAttenuation({ sizing }: Pick<SizedDesign, 'sizing'>): number {
   return sizing.summing_ohm / (sizing.summing_ohm + sizing.sense_ohm);
 }
 

@@ -8,7 +8,7 @@ import {
   type LeastGain,
   leastGain,
 } from '../law/leastGain.ts';
-import { hasInductance, type LoopCorners, loopCorners } from '../law/loopCorners.ts';
+import { hasInductance, type KnownCorners, type LoopCorners, loopCorners } from '../law/loopCorners.ts';
 import { demandOf } from '../ramp/demandOf.ts';
 import { buildRegion } from '../region/buildRegion.ts';
 import type { OperatingRegion } from '../region/OperatingRegion.ts';
@@ -17,6 +17,7 @@ import { refuseGaps } from '../spec/notYet.ts';
 import type { ReadSpecification } from '../spec/readSpecification.ts';
 import { buildBoardOpamp } from './boardOpamp/buildBoardOpamp.ts';
 import { sizeBoardOpamp } from './boardOpamp/sizeBoardOpamp.ts';
+import { senseAttenuation } from './rampFigures.ts';
 import type { SizedDesign, SizedLaw } from './SizedDesign.ts';
 
 /** Sizing from the specification to the circuit: region → law → ramp → parts → circuit. */
@@ -39,15 +40,20 @@ export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
   const sizing = sizeBoardOpamp(demand, request);
   if (!sizing.ok) return sizing;
   const { spread, senseSlope_per_s, wantedSlope_per_s } = sizing.value;
+  const built = loopCorners(
+    specification,
+    region.value,
+    senseAttenuation({ sizing: sizing.value }),
+  ) as KnownCorners;
   const sized = (of: Law, least: LeastGain, gain: number, realisedGain: number) =>
-    sizedLaw(of, least, gain, realisedGain, region.value, corners, spread);
+    sizedLaw(of, least, gain, realisedGain, region.value, built, spread);
   const other = law.kind === 'fixed' ? laws.vin : laws.fixed;
   const otherLeast = leastGain(other, region.value, corners, goal);
   const otherGain = otherLeast.gain / spread.low;
   return success({
     request,
     region: region.value,
-    corners,
+    corners: built,
     chosen: sized(
       law,
       required,

@@ -1,6 +1,7 @@
 import type { Assumption } from '../base/Assumption.ts';
 import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import { dampingIndex } from '../law/innerLoop.ts';
+import { ownRamp_V } from '../law/leastGain.ts';
 import { rampReference } from '../ramp/demandOf.ts';
 import type { RegionPoint } from '../region/OperatingRegion.ts';
 
@@ -49,9 +50,10 @@ export function designAssumptions(design: SizedDesign): readonly Assumption[] {
 
 /** Damping index of the worst unit at a point with its ramp scaled by what the inductance leaves. */
 function indexWith(design: SizedDesign, at: RegionPoint, inductanceShare: number): number {
-  const { chosen, corners, sizing } = design;
-  const scale = corners.at(at).lambda.low * sizing.spread.low * inductanceShare;
-  return dampingIndex(at.up_V, at.swing_V, scale * chosen.law.ramp_V(chosen.realisedGain, at));
+  const { chosen, corners, region, sizing } = design;
+  const ramp_V = corners.at(at).lambda.low * sizing.spread.low * chosen.law.ramp_V(chosen.realisedGain, at);
+  const own_V = ownRamp_V(region, corners, at).low;
+  return dampingIndex(at.up_V, at.swing_V, inductanceShare * (ramp_V + own_V));
 }
 
 /** The same point with more duty, the swing as it was. */

@@ -40,12 +40,20 @@ export function hasInductance(corners: LoopCorners): corners is KnownCorners {
   return corners.referenceInductance_H !== null && corners.inductance_H !== null;
 }
 
-export function loopCorners(specification: Specification, region: OperatingRegion): LoopCorners {
+/**
+ * @param attenuation what a summing network leaves of the sensed current: a ramp that the controller adds
+ *   behind it counts for the inverse; 1 without one, or where it is not known yet
+ */
+export function loopCorners(
+  specification: Specification,
+  region: OperatingRegion,
+  attenuation = 1,
+): LoopCorners {
   const { inductance } = specification;
-  if (inductance === null) return uniform(specification, null, null);
+  if (inductance === null) return uniform(specification, null, null, attenuation);
   if (inductance.kind === 'value') {
     const reference_H = inductance.value_H.from.nominal;
-    return uniform(specification, reference_H, inductanceInterval(inductance));
+    return uniform(specification, reference_H, inductanceInterval(inductance), attenuation);
   }
   const inductanceAt = (point: RegionPoint) => rippleInductance(specification, inductance, point);
   const inductance_H = {
@@ -53,9 +61,9 @@ export function loopCorners(specification: Specification, region: OperatingRegio
     high: extremesOver(region, (point) => inductanceAt(point).high).max.value,
   };
   return {
-    ...uniform(specification, inductance_H.low, inductance_H),
+    ...uniform(specification, inductance_H.low, inductance_H, attenuation),
     isUniform: false,
-    at: (point) => pointCorners(specification, inductance_H.low, inductanceAt(point)),
+    at: (point) => pointCorners(specification, inductance_H.low, inductanceAt(point), attenuation),
   };
 }
 
@@ -65,15 +73,16 @@ export function nominalCorners(specification: Specification, corners: LoopCorner
   const exact = reference_H === null ? null : { low: reference_H, high: reference_H };
   const { nominal } = specification.senseGain_V_per_A;
   const exactGain = { ...specification, senseGain_V_per_A: { nominal, low: nominal, high: nominal } };
-  return uniform(exactGain, reference_H, exact);
+  return uniform(exactGain, reference_H, exact, 1);
 }
 
 function uniform(
   specification: Specification,
   reference_H: number | null,
   inductance_H: Interval | null,
+  attenuation: number,
 ): LoopCorners {
-  const everywhere = pointCorners(specification, reference_H, inductance_H);
+  const everywhere = pointCorners(specification, reference_H, inductance_H, attenuation);
   return {
     referenceInductance_H: reference_H,
     inductance_H,
@@ -88,6 +97,7 @@ function pointCorners(
   { senseGain_V_per_A: gain, controller, magnetizingInductance_H: magnetizing }: Specification,
   reference_H: number | null,
   inductance_H: Interval | null,
+  attenuation: number,
 ): PointCorners {
   const { low, high } = inductance_H === null || reference_H === null ? { low: 0, high: 0 } : inductance_H;
   const share = (value: number) => (reference_H === null ? 1 : value / reference_H);
@@ -98,8 +108,8 @@ function pointCorners(
       high: (share(high) * gain.nominal) / gain.low,
     },
     internalRamp_V: {
-      low: ((internal?.low ?? 0) * low) / gain.high,
-      high: ((internal?.high ?? 0) * high) / gain.low,
+      low: ((internal?.low ?? 0) * low) / (gain.high * attenuation),
+      high: ((internal?.high ?? 0) * high) / (gain.low * attenuation),
     },
     magnetizingShare: {
       low: magnetizing === null ? 0 : low / magnetizing.to.high,

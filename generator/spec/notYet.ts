@@ -35,11 +35,6 @@ const gaps: readonly Gap[] = [
     wanted: ({ ramp }) => (ramp.follows === 'nothing' ? null : ramp.follows),
     instead: 'nothing',
   },
-  {
-    key: 'controller',
-    wanted: ({ controller }) => (controller === null ? null : "a controller's own ramp and limits"),
-    instead: 'a specification without controller',
-  },
 ];
 
 /** Refuses by name what the circuit stages cannot do yet, all at once. */

@@ -45,7 +45,7 @@ export function converterDeck(
   const onTime_s = point.duty * timing.period_s;
   const figures = rampFigures(design, source.track_V(point.inputVoltage_V));
   const atTrip_V =
-    figures.comparatorSlope_V_per_s * onTime_s +
+    (figures.comparatorSlope_V_per_s + state.internalSlope_V_per_s) * onTime_s +
     attenuation * senseGain * (state.peak_A + state.freeSlope_A_per_s * onTime_s);
   const stage = stageLines(specification.converter, {
     ...point,
@@ -87,6 +87,8 @@ export function converterDeck(
     shiftTo: 'wound',
     shift: shift.corners.map((value) => fixedNumber(value, 9)).join(' '),
     senseGain: fixedNumber(senseGain),
+    internalRamp:
+      state.internalSlope_V_per_s === 0 ? '' : fixedNumber(state.internalSlope_V_per_s * timing.low_s, 9),
     control: fixedNumber(atTrip_V, 6),
     clockShare: fixedNumber(1 / supply, 9),
     clearThreshold: fixedNumber(supply / 2),

@@ -1,3 +1,4 @@
+import { senseAttenuation } from '../../circuit/rampFigures.ts';
 import type { SizedDesign, SizedLaw } from '../../circuit/SizedDesign.ts';
 import { cycleRatio, dampingIndex } from '../../law/innerLoop.ts';
 import type { RegionPoint } from '../../region/OperatingRegion.ts';
@@ -14,6 +15,8 @@ export interface OperatingState {
   readonly magnetizing: StageConditions['magnetizing'];
   /** Slope that the magnetizing current adds, referred to the inductor [A/s]. */
   readonly freeSlope_A_per_s: number;
+  /** The controller's own ramp at the comparator [V/s]. */
+  readonly internalSlope_V_per_s: number;
 }
 
 /** How much faster than it rises the magnetizing current is reset, besides what the duty asks for. */
@@ -24,7 +27,11 @@ export function operatingState(design: SizedDesign, sized: SizedLaw, point: Regi
   const inductance_H = design.corners.referenceInductance_H;
   const magnetizing = magnetizingOf(design, point);
   const freeSlope_A_per_s = magnetizing === null ? 0 : magnetizing.rise_V / magnetizing.inductance_H;
-  const ramp_V = sized.law.ramp_V(sized.realisedGain, point) + freeSlope_A_per_s * inductance_H;
+  const internalSlope_V_per_s = specification.controller?.internalRamp_V_per_s?.nominal ?? 0;
+  const internal_A_per_s =
+    internalSlope_V_per_s / (senseAttenuation(design) * specification.senseGain_V_per_A.nominal);
+  const ramp_V =
+    sized.law.ramp_V(sized.realisedGain, point) + (freeSlope_A_per_s + internal_A_per_s) * inductance_H;
   const index = dampingIndex(point.up_V, point.swing_V, ramp_V);
   const ripple_A = (point.up_V / inductance_H) * point.duty * design.demand.period_s;
   const load_A = specification.load_A?.to.nominal;
@@ -37,6 +44,7 @@ export function operatingState(design: SizedDesign, sized: SizedLaw, point: Regi
     peak_A: mean_A + ripple_A / 2,
     magnetizing,
     freeSlope_A_per_s,
+    internalSlope_V_per_s,
   };
 }
 
