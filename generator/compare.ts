@@ -1,28 +1,17 @@
 import { failure, type Outcome, success } from './base/Problem.ts';
 import { comparisonDocument } from './emit/comparisonDocument.ts';
 import type { ComparisonDocument } from './emit/comparisonSchema.ts';
-import { hasInductance, type LoopCorners, loopCorners } from './law/loopCorners.ts';
-import { type ComparedLaw, compareLaws } from './loop/compareLaws.ts';
-import { type LightLoad, lightLoad } from './loop/lightLoad.ts';
-import { type NeededRamp, neededRamp } from './loop/neededRamp.ts';
-import { type Verdict, verdict } from './loop/verdict.ts';
+import { hasInductance, loopCorners } from './law/loopCorners.ts';
+import type { Comparison } from './loop/Comparison.ts';
+import { compareLaws } from './loop/compareLaws.ts';
+import { comparisonNotes } from './loop/comparisonNotes.ts';
+import { lightLoad } from './loop/lightLoad.ts';
+import { neededRamp } from './loop/neededRamp.ts';
+import { verdict } from './loop/verdict.ts';
 import { nominalPeriod_s } from './ramp/demandOf.ts';
 import { buildRegion } from './region/buildRegion.ts';
-import type { OperatingRegion } from './region/OperatingRegion.ts';
 import { powerStageOf } from './region/powerStages.ts';
 import type { ReadSpecification } from './spec/readSpecification.ts';
-
-/** Every law over the region, and the verdict. */
-export interface Comparison {
-  readonly request: ReadSpecification;
-  readonly region: OperatingRegion;
-  readonly corners: LoopCorners;
-  readonly laws: readonly ComparedLaw[];
-  readonly verdict: Verdict;
-  /** Null without an inductance. */
-  readonly lightLoad: LightLoad | null;
-  readonly neededRamp: readonly NeededRamp[];
-}
 
 /** Compares a fixed ramp with the adaptive laws: spec → region → law → loop. No circuit is chosen. */
 export function compare(request: ReadSpecification): Outcome<Comparison> {
@@ -40,6 +29,7 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
     verdict: verdict(specification, region.value, laws),
     lightLoad: hasInductance(corners) ? lightLoad(specification, region.value, corners, period_s) : null,
     neededRamp: neededRamp(region.value, specification.goal.dampingIndex),
+    notes: comparisonNotes(specification, region.value, corners, laws),
   });
 }
 

@@ -1,4 +1,5 @@
 import type { Outcome } from '../base/Problem.ts';
+import type { ComparisonDocument } from '../emit/comparisonSchema.ts';
 import type { Result, RuleOutcome, Simulation } from '../emit/resultSchema.ts';
 import type { ReadSpecification } from '../spec/readSpecification.ts';
 import type { EngineOpening, SpiceEngine } from '../spice/Deck.ts';
@@ -45,7 +46,7 @@ export interface SimulationRun<Waves> {
  *
  * Tests put stages of their own in the place of those that fail only on a broken machine.
  */
-export interface Stages<Design = unknown, Waves = unknown> {
+export interface Stages<Design = unknown, Waves = unknown, Compared = unknown> {
   decodeDocument(bytes: Uint8Array, name: string): Promise<Outcome<string>>;
   readSpecification(source: SpecificationSource): Promise<Outcome<ReadSpecification>>;
   starterSpecification(): Promise<string>;
@@ -61,4 +62,7 @@ export interface Stages<Design = unknown, Waves = unknown> {
   simulate(design: Design, engine: SpiceEngine, options: SimulationOptions): Promise<SimulationRun<Waves>>;
   result(design: Design, rules: readonly RuleOutcome[], simulation: Simulation | null): Promise<Result>;
   files(design: Design, result: Result, waveforms: Waves | null): Promise<ReadonlyMap<string, string>>;
+  compare(request: ReadSpecification): Promise<Outcome<Compared>>;
+  comparison(compared: Compared): Promise<ComparisonDocument>;
+  comparisonFiles(compared: Compared): Promise<ReadonlyMap<string, string>>;
 }

@@ -1,9 +1,10 @@
 import type { SizedDesign } from '../circuit/SizedDesign.ts';
+import type { Comparison } from '../loop/Comparison.ts';
 import type { Waveforms } from '../spice/Deck.ts';
 import type { Stages } from './Stages.ts';
 
 /** The real stages: the one place where the command line and the pipeline meet. */
-export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>> = {
+export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>, Comparison> = {
   async decodeDocument(bytes, name) {
     const { decodeDocument } = await import('../spec/decodeDocument.ts');
     return decodeDocument(bytes, name);
@@ -62,5 +63,17 @@ export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>> 
   async files(design, result, waveforms) {
     const { designFiles } = await import('../designFiles.ts');
     return designFiles(design, result, waveforms);
+  },
+  async compare(request) {
+    const { compare } = await import('../compare.ts');
+    return compare(request);
+  },
+  async comparison(compared) {
+    const { comparisonDocument } = await import('../emit/comparisonDocument.ts');
+    return comparisonDocument(compared);
+  },
+  async comparisonFiles(compared) {
+    const { comparisonFiles } = await import('../comparisonFiles.ts');
+    return comparisonFiles(compared);
   },
 };

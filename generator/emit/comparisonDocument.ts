@@ -1,5 +1,5 @@
 import type { Interval } from '../base/Quantity.ts';
-import type { Comparison } from '../compare.ts';
+import type { Comparison } from '../loop/Comparison.ts';
 import type { ComparedLaw } from '../loop/compareLaws.ts';
 import type { ComparisonDocument } from './comparisonSchema.ts';
 
@@ -27,7 +27,7 @@ export function comparisonDocument(comparison: Comparison): ComparisonDocument {
       dutyRatio: need.duty,
       rampOverUpSlopeRatio: need.rampOverUpSlope,
     })),
-    notes: comparisonNotes(comparison),
+    notes: [...comparison.notes],
     assumptions: comparison.request.assumptions.map(({ key, value, unit, reason }) => ({
       key,
       value,
@@ -56,23 +56,4 @@ function lawFigures(compared: ComparedLaw): ComparisonDocument['laws'][number] {
 
 function pair({ low, high }: Interval): [number, number] {
   return [low, high];
-}
-
-/** What the figures do not say by themselves. */
-export function comparisonNotes({ request, corners }: Comparison): string[] {
-  const { specification } = request;
-  const notes: string[] = [];
-  if (corners.referenceInductance_H === null)
-    notes.push(
-      'Without an inductance the gains and damping indices hold for any, as ratios; slopes in V/s, capacitor values, limits in amperes, line response and the border to discontinuous conduction cannot be given.',
-    );
-  if (specification.inductance?.kind === 'ripple')
-    notes.push(
-      'The inductance follows the ripple at each input, output and frequency, as who uses the converter would choose it; gains refer to the least inductance over the region.',
-    );
-  if (specification.converter === 'forward' && specification.stage === 'half-bridge')
-    notes.push(
-      'A half-bridge under peak current control drives the midpoint of its capacitors out of balance: it needs a balancing winding or another control.',
-    );
-  return notes;
 }

@@ -1,4 +1,5 @@
 import type { Command } from '../commandLine/Command.ts';
+import { compareCommand } from './compare.ts';
 import { designCommand } from './design.ts';
 import { initCommand } from './init.ts';
 import { rulesCommand } from './rules.ts';
@@ -8,6 +9,7 @@ import { simulateCommand } from './simulate.ts';
 /** Every command, in the order of the help; a new one is its file and a line here. */
 export const commands: readonly Command[] = [
   designCommand,
+  compareCommand,
   simulateCommand,
   rulesCommand,
   initCommand,
@@ -15,4 +17,4 @@ export const commands: readonly Command[] = [
 ];
 
 /** Known by name, and not there yet. */
-export const laterCommands: readonly string[] = ['compare', 'window', 'loop', 'tolerance', 'sweep'];
+export const laterCommands: readonly string[] = ['window', 'loop', 'tolerance', 'sweep'];

@@ -1,7 +1,7 @@
 /** No line of a view is wider. */
 export const viewWidth = 80;
 
-const labelWidth = 13;
+export const labelWidth = 13;
 const textWidth = viewWidth - labelWidth - 1;
 
 /** A label and what it says, continued below itself. */

@@ -19,7 +19,20 @@ export async function writeSet(
 ): Promise<Step<unknown>> {
   const directory = givenValue(invocation, 'out') ?? '';
   const { writeFileSet } = await import('../../emit/write/writeFileSet.ts');
-  return folderStep(await writeFileSet({ ...folderRequest(directory, invocation, session), files }), session);
+  const request = { ...folderRequest(directory, invocation, session), files };
+  return folderStep(await writeFileSet(request), session);
+}
+
+/** Adds to the set in the folder of `--out`, or begins one. */
+export async function addToSet(
+  files: ReadonlyMap<string, string>,
+  invocation: Invocation,
+  session: Session,
+): Promise<Step<unknown>> {
+  const directory = givenValue(invocation, 'out') ?? '';
+  const { writeFileSet } = await import('../../emit/write/writeFileSet.ts');
+  const request = { ...folderRequest(directory, invocation, session), files, keepsRest: true };
+  return folderStep(await writeFileSet(request), session);
 }
 
 function folderRequest(directory: string, invocation: Invocation, { surroundings }: Session) {

@@ -10,7 +10,7 @@ export interface EntryStatus {
 
 /** An open file, for writing it through to the disk. */
 export interface OpenFile {
-  writeFile(data: string): Promise<void>;
+  writeFile(data: string | Uint8Array): Promise<void>;
   sync(): Promise<void>;
   close(): Promise<void>;
 }

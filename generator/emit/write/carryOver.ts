@@ -40,11 +40,10 @@ export async function carryOver({ folder, old, fs }: Place, rename: Rename): Pro
 
   async function fateOf(entry: Buffer, owned: Fingerprints): Promise<'moves' | 'is displaced' | 'stays'> {
     const hash = owned.get(entry.toString('utf8'));
-    if (hash !== undefined) {
-      return (await fingerprint(entryIn(old, entry), fs)) === hash ? 'stays' : 'is displaced';
-    }
-    if (!(await exists(entryIn(folder, entry), fs))) return 'moves';
+    if (hash === undefined && !(await exists(entryIn(folder, entry), fs))) return 'moves';
     const found = await fingerprint(entryIn(old, entry), fs);
+    if (hash !== undefined && found === hash) return 'stays';
+    // Ours and edited, in a set that was added to: the new folder has the very same.
     const same = found !== null && found === (await fingerprint(entryIn(folder, entry), fs));
     return same ? 'stays' : 'is displaced';
   }

@@ -5,29 +5,35 @@ import { folderProblem } from './FolderOutcome.ts';
 import { folderRefusal, whyNoFolder } from './locate.ts';
 import { MANIFEST, readOwnership } from './manifest.ts';
 import type { Place } from './Place.ts';
+import { nothingElse, type RestOfSet } from './restOfSet.ts';
 
 /** Why a set must not take a folder's place: what the folder is or, unless forced, what is in it. */
 export async function refusalsOf(
   place: Place,
   files: ReadonlyMap<string, string>,
   force: boolean,
+  rest: RestOfSet = nothingElse,
 ): Promise<readonly Problem[]> {
   const reason = await whyNoFolder(place.folder, place.fs);
   if (reason !== null) return [folderRefusal(place.shown, reason)];
-  return force ? [] : conflictsIn(place, files);
+  return force ? [] : conflictsIn(place, files, rest);
 }
 
 /**
  * Every file whose words a new set would take the place of: ours but edited by hand, or the user's own
- * under a name of the new set.
+ * under a name of the new set. The rest of a set that is added to keeps its words.
  */
-async function conflictsIn(place: Place, files: ReadonlyMap<string, string>): Promise<Problem[]> {
+async function conflictsIn(
+  place: Place,
+  files: ReadonlyMap<string, string>,
+  rest: RestOfSet,
+): Promise<Problem[]> {
   const { folder, fs } = place;
   const owned = await readOwnership(folder, fs);
   const problems: Problem[] = [];
   for (const name of [...new Set([...owned.keys(), ...files.keys()])].sort()) {
     const path = join(folder, name);
-    if (!(await exists(path, fs))) continue;
+    if (rest.files.has(name) || !(await exists(path, fs))) continue;
     const found = await fingerprint(path, fs);
     if (owned.has(name) && found !== owned.get(name)) problems.push(edited(place, name, found === null));
     if (!owned.has(name) && (found === null || found !== sha256(files.get(name)!))) {

@@ -57,7 +57,7 @@ export async function removeFile(path: string, fs: FileSystem): Promise<void> {
 }
 
 /** A new file, on the disk when this returns; never over an existing one, never through a link. */
-export async function createFile(path: string, text: string, fs: FileSystem): Promise<void> {
+export async function createFile(path: string, text: string | Uint8Array, fs: FileSystem): Promise<void> {
   const file = await fs.open(path, 'wx');
   try {
     await file.writeFile(text);

@@ -13,16 +13,18 @@ const PLAIN_NAME = /^[A-Za-z0-9][A-Za-z0-9._-]*$/;
 
 /**
  * The text of `manifest.json` for a set: SHA-256 of each file, sorted by name.
+ * @param rest what stays in the set besides
  * @throws RangeError when a name could leave the folder, or two are one where case does not count
  */
-export function manifestOf(files: ReadonlyMap<string, string>): string {
-  const names = [...files.keys()].sort();
+export function manifestOf(files: ReadonlyMap<string, string>, rest: Fingerprints = new Map()): string {
+  const hashes = new Map([...rest, ...[...files].map(([name, text]) => [name, sha256(text)] as const)]);
+  const names = [...hashes.keys()].sort();
   const bad = names.find((name) => !PLAIN_NAME.test(name) || name.toLowerCase() === MANIFEST);
   if (bad !== undefined) throw new RangeError(`not a name for a file of the set: ${bad}`);
   if (new Set(names.map((name) => name.toLowerCase())).size < names.length) {
     throw new RangeError('two names of the set differ in case only');
   }
-  return render(new Map(names.map((name) => [name, sha256(files.get(name)!)])));
+  return render(new Map(names.map((name) => [name, hashes.get(name)!])));
 }
 
 function render(fingerprints: Fingerprints): string {

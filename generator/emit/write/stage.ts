@@ -12,7 +12,7 @@ export class Interruption extends Error {}
  */
 export async function stage(
   place: Place,
-  files: ReadonlyMap<string, string>,
+  files: ReadonlyMap<string, string | Uint8Array>,
   signal: AbortSignal | undefined,
 ): Promise<void> {
   const { fs, fresh, journal, parent } = place;

@@ -9,6 +9,7 @@ import { isSystemError } from './machineOutcome.ts';
 import { MANIFEST, manifestOf, readOwnership } from './manifest.ts';
 import type { Place } from './Place.ts';
 import { settled } from './recoverFileSet.ts';
+import { nothingElse, restOfSet } from './restOfSet.ts';
 import { stage, unstage } from './stage.ts';
 
 export interface WriteRequest extends FolderRequest, Waiting {
@@ -16,6 +17,8 @@ export interface WriteRequest extends FolderRequest, Waiting {
   readonly files: ReadonlyMap<string, string>;
   /** Keep what was edited by hand as NAME.bak instead of refusing. */
   readonly force: boolean;
+  /** Whether the files join what the set holds already, edited or not, instead of replacing it. */
+  readonly keepsRest?: boolean;
 }
 
 export interface WrittenSet {
@@ -36,7 +39,7 @@ export interface WrittenSet {
  * @throws RangeError when a name of the set is none that stays in the folder
  */
 export async function writeFileSet(request: WriteRequest): Promise<FolderOutcome<WrittenSet>> {
-  const files = new Map([...request.files, [MANIFEST, manifestOf(request.files)]]);
+  manifestOf(request.files);
   return withoutExceptions(request.directory, async () => {
     const located = await locate(request);
     if (!located.ok) return refused(...located.problems);
@@ -44,7 +47,7 @@ export async function writeFileSet(request: WriteRequest): Promise<FolderOutcome
     const made = await place.fs.mkdir(place.parent, { recursive: true });
     let outcome: FolderOutcome<WrittenSet> | null = null;
     try {
-      outcome = await holdFolder(place, request, () => replace(place, files, request));
+      outcome = await holdFolder(place, request, () => replace(place, request));
       return outcome;
     } finally {
       if (made && outcome?.kind !== 'done') await removeParents(place, made);
@@ -54,16 +57,20 @@ export async function writeFileSet(request: WriteRequest): Promise<FolderOutcome
 
 async function replace(
   place: Place,
-  files: ReadonlyMap<string, string>,
-  { force, signal }: WriteRequest,
+  { files: added, force, keepsRest = false, signal }: WriteRequest,
 ): Promise<FolderOutcome<WrittenSet>> {
   const recovered = await settled(place);
   if (recovered.kind !== 'done') return recovered;
-  const problems = await refusalsOf(place, files, force);
+  const rest = keepsRest ? await restOfSet(place, added.keys()) : nothingElse;
+  const texts = new Map([...added, [MANIFEST, manifestOf(added, rest.fingerprints)]]);
+  const problems = await refusalsOf(place, texts, force, rest);
   if (problems.length > 0) return refused(...problems);
+  const files = new Map<string, string | Uint8Array>([...rest.files, ...texts]);
   const before = await readOwnership(place.folder, place.fs);
   const { kept, notes } = await stageAndExchange(place, files, signal);
-  const removed = [...before.keys()].filter((name) => !files.has(name)).sort();
+  const removed = [...before.keys()]
+    .filter((name) => !files.has(name) && !rest.fingerprints.has(name))
+    .sort();
   return done({ directory: place.shown, files: [...files.keys()].sort(), kept, removed }, [
     ...recovered.notes,
     ...notes,
@@ -72,7 +79,7 @@ async function replace(
 
 async function stageAndExchange(
   place: Place,
-  files: ReadonlyMap<string, string>,
+  files: ReadonlyMap<string, string | Uint8Array>,
   signal: AbortSignal | undefined,
 ) {
   try {
