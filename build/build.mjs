@@ -12,8 +12,12 @@ const folder = join(root, `.tmp/dist-${process.pid}`);
 const place = join(root, 'dist');
 const old = `${folder}-old`;
 
-/** What most runs do; the functions that it calls are in the code cache. */
-const representative = 'design|--vin|8 V to 36 V|--l|10 uH|--fs|500 kHz|--engine|none|--json'.split('|');
+/** What most runs do; the functions that they call are in the code cache. */
+const figures = '--vin|8 V to 36 V|--l|10 uH|--fs|500 kHz|--json'.split('|');
+const representative = [
+  ['design', ...figures, '--engine', 'none'],
+  ['compare', ...figures],
+];
 
 try {
   mkdirSync(folder, { recursive: true });
@@ -22,7 +26,7 @@ try {
   writeFileSync(script, inAscii(readFileSync(script, 'utf8')));
   placeWorker();
   placeLauncher();
-  node('build/codeCache.cjs', folder, ...representative);
+  node('build/codeCache.cjs', folder, JSON.stringify(representative));
   node('node_modules/typescript/bin/tsc', '-p', 'tsconfig.types.json', '--outDir', join(folder, 'types'));
   finishTypes(join(folder, 'types'));
   replace();

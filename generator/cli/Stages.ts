@@ -1,6 +1,7 @@
 import type { Outcome } from '../base/Problem.ts';
 import type { ComparisonDocument } from '../emit/comparisonSchema.ts';
 import type { Result, RuleOutcome, Simulation } from '../emit/resultSchema.ts';
+import type { WindowDocument } from '../emit/windowSchema.ts';
 import type { ReadSpecification } from '../spec/readSpecification.ts';
 import type { EngineOpening, SpiceEngine } from '../spice/Deck.ts';
 
@@ -46,7 +47,7 @@ export interface SimulationRun<Waves> {
  *
  * Tests put stages of their own in the place of those that fail only on a broken machine.
  */
-export interface Stages<Design = unknown, Waves = unknown, Compared = unknown> {
+export interface Stages<Design = unknown, Waves = unknown, Compared = unknown, Found = unknown> {
   decodeDocument(bytes: Uint8Array, name: string): Promise<Outcome<string>>;
   readSpecification(source: SpecificationSource): Promise<Outcome<ReadSpecification>>;
   starterSpecification(): Promise<string>;
@@ -65,4 +66,7 @@ export interface Stages<Design = unknown, Waves = unknown, Compared = unknown> {
   compare(request: ReadSpecification): Promise<Outcome<Compared>>;
   comparison(compared: Compared): Promise<ComparisonDocument>;
   comparisonFiles(compared: Compared): Promise<ReadonlyMap<string, string>>;
+  window(request: ReadSpecification): Promise<Outcome<Found>>;
+  windowDocument(found: Found): Promise<WindowDocument>;
+  windowFiles(found: Found): Promise<ReadonlyMap<string, string>>;
 }

@@ -1,10 +1,11 @@
 import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import type { Comparison } from '../loop/Comparison.ts';
+import type { Window } from '../loop/Window.ts';
 import type { Waveforms } from '../spice/Deck.ts';
 import type { Stages } from './Stages.ts';
 
 /** The real stages: the one place where the command line and the pipeline meet. */
-export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>, Comparison> = {
+export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>, Comparison, Window> = {
   async decodeDocument(bytes, name) {
     const { decodeDocument } = await import('../spec/decodeDocument.ts');
     return decodeDocument(bytes, name);
@@ -75,5 +76,17 @@ export const shippedStages: Stages<SizedDesign, ReadonlyMap<string, Waveforms>, 
   async comparisonFiles(compared) {
     const { comparisonFiles } = await import('../comparisonFiles.ts');
     return comparisonFiles(compared);
+  },
+  async window(request) {
+    const { window } = await import('../window.ts');
+    return window(request);
+  },
+  async windowDocument(found) {
+    const { windowDocument } = await import('../emit/windowDocument.ts');
+    return windowDocument(found);
+  },
+  async windowFiles(found) {
+    const { windowFiles } = await import('../windowFiles.ts');
+    return windowFiles(found);
   },
 };

@@ -43,11 +43,11 @@ export function lightLoad(
 function borderNotes(least_A: number | null, border_A: number): string[] {
   if (least_A === null)
     return [
-      `The load is not known: below ${engineering(border_A, 'A')} conduction may be discontinuous, and the damping figures then do not apply.`,
+      `The load is not known: below ${engineering(border_A, 'A')} conduction may be discontinuous; the damping figures hold above.`,
     ];
   if (least_A >= border_A) return ['Conduction is continuous over the whole load range.'];
   return [
-    `Below ${engineering(border_A, 'A')} conduction becomes discontinuous: the current starts from zero in each cycle, a perturbation does not reach the next one, and the damping figures do not apply.`,
+    `Below ${engineering(border_A, 'A')} conduction becomes discontinuous: each cycle starts from zero current, so that no perturbation reaches the next, and the damping figures do not apply.`,
   ];
 }
 
@@ -56,7 +56,7 @@ function buckNotes(region: OperatingRegion, reached: boolean | null): string[] {
   const ratio = extremesOver(region, (point) => point.outputVoltage_V / point.inputVoltage_V).max.value;
   if (ratio <= discontinuousStabilityRatio) return [];
   return [
-    `A buck without a ramp has a low-frequency instability there above Vout/Vin = 2/3; a ramp of ${leastDiscontinuousRamp.toPrecision(2)} of the down slope cures it at every ratio, and every law here gives more where it is needed.`,
+    `There a buck without a ramp is unstable at low frequency above Vout/Vin = 2/3; ${leastDiscontinuousRamp.toPrecision(2)} of the down slope cures it, and every law here gives more.`,
   ];
 }
 

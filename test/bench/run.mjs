@@ -24,6 +24,7 @@ const tasks = [
     words: [command, 'design', sample, '--json', '--engine', 'none'],
     limit: 2.5,
   },
+  { name: 'compare FLAGS --json', words: [command, 'compare', ...flags], limit: 2.5 },
   { name: 'design, whole simulation', words: [command, 'design', ...flags], limit: 60, slow: true },
 ].filter(({ words }) => !words.includes(sample) || existsSync(sample));
 

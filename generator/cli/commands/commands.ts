@@ -5,11 +5,13 @@ import { initCommand } from './init.ts';
 import { rulesCommand } from './rules.ts';
 import { schemaCommand } from './schema.ts';
 import { simulateCommand } from './simulate.ts';
+import { windowCommand } from './window.ts';
 
 /** Every command, in the order of the help; a new one is its file and a line here. */
 export const commands: readonly Command[] = [
   designCommand,
   compareCommand,
+  windowCommand,
   simulateCommand,
   rulesCommand,
   initCommand,
@@ -17,4 +19,4 @@ export const commands: readonly Command[] = [
 ];
 
 /** Known by name, and not there yet. */
-export const laterCommands: readonly string[] = ['window', 'loop', 'tolerance', 'sweep'];
+export const laterCommands: readonly string[] = ['loop', 'tolerance', 'sweep'];

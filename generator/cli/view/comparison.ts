@@ -32,7 +32,9 @@ export function comparisonView(
     ...labelled('light load', document.lightLoad?.notes ?? []),
     ...labelled('note', document.notes),
     ...row('assumptions', assumptionsText(document)),
-    ...row('files', directory === null ? 'none written; --out DIR keeps them' : `in ${printable(directory)}`),
+    ...(directory === null
+      ? []
+      : row('files', `comparison.html, comparison.json in ${printable(directory)}`)),
   ];
   return `${lines.join('\n')}\n`;
 }
@@ -77,7 +79,7 @@ const rows: readonly (readonly [head: string, text: (law: Law) => string | null]
   ['α ringing', ({ cycleRatioMin: ratio }) => (ratio < 0 ? plainNumber(ratio) : 'none')],
   ['α sluggish', ({ cycleRatioMax: ratio }) => (ratio > 0 ? plainNumber(ratio) : 'none')],
   ['cycles to 1 %', ({ settlingCyclesMax: count }) => (count === null ? 'endless' : String(count))],
-  ['ramp share, %', ({ rampShare }) => range(rampShare.map((share) => 100 * share))],
+  ['ramp share, %', ({ rampShare }) => range(rampShare, (share) => String(Math.round(100 * share)))],
   ['peak limit, A', ({ peakLimit_A }) => peakLimit_A && range(peakLimit_A)],
   ['out limit, A', ({ outputLimit_A }) => outputLimit_A && range(outputLimit_A)],
   ['line, mA/V', ({ lineResponse_A_per_V: line }) => line && range(line.map((value) => 1e3 * value))],
@@ -114,8 +116,8 @@ function lawTable(laws: readonly Law[], paint: Paint): string[] {
   ];
 }
 
-function range([low, high]: readonly number[]): string {
-  const [from, to] = [plainNumber(low!), plainNumber(high!)];
+function range([low, high]: readonly number[], text = plainNumber): string {
+  const [from, to] = [text(low!), text(high!)];
   return from === to ? from : `${from} … ${to}`;
 }
 
