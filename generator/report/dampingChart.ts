@@ -1,4 +1,4 @@
-import type { SizedDesign, SizedLaw } from '../circuit/SizedDesign.ts';
+import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import type { DeckCheck, Result } from '../emit/resultSchema.ts';
 import type { Chart, DataPoint, EdgeLabel, Ink, LegendEntry, Mark } from './chart/Chart.ts';
 import { plainNumber, volts } from './figures.ts';
@@ -40,7 +40,7 @@ export function dampingChart(design: SizedDesign, result: Result): Chart {
       ...worstNotes(design),
     ],
     edgeLabels: [
-      ...bands.map(({ band, law, ink }) => ({ y: band.at(-1)!.high, ink, text: shortName(law) })),
+      ...bands.map(({ band, ink }) => ({ y: band.at(-1)!.high, ink, text: ink })),
       { y: goal.dampingIndex, ink: 'goal', text: `goal ${plainNumber(goal.dampingIndex)}` },
       { y: goal.ceilingIndex, ink: 'ceiling', text: `ceiling ${plainNumber(goal.ceilingIndex)}` },
     ] satisfies EdgeLabel[],
@@ -55,10 +55,6 @@ export function dampingChart(design: SizedDesign, result: Result): Chart {
       ...(result.simulation === null ? [] : simulatedLegend(inkOf(design.chosen.law.kind))),
     ],
   };
-}
-
-function shortName({ law }: SizedLaw): string {
-  return law.kind === 'fixed' ? 'fixed' : 'adaptive, ∝ Vin';
 }
 
 function inputAxis({ region }: SizedDesign) {

@@ -109,7 +109,7 @@ function circuitLines(design: SizedDesign): Line[] {
       partsSource,
     ],
     [
-      'time to reset to 1 %',
+      'time to reset to 1\u00a0%',
       `supply ${figure(demand.supply_V.low, 'V')}, highest frequency`,
       't = edges + ln 100 · Ron·C',
       `10 ns + 4.605 · ${figure(switch_ohm, 'Ω')} · ${figure(sizing.totalCapacitance_F, 'F')}`,
