@@ -113,15 +113,15 @@ export function linearMotion(stage: LinearStage, interval: LinearInterval): Moti
       return reach(state, rows[watched], slope, wanted, from, to);
     },
     timeToZero(state, to) {
-      differentiate(state);
-      if (state[0]! <= 0 && slopes[0]! <= 0) return 0;
-      const from = state[0]! <= 0 ? firstRise : 0;
-      return reach(state, rows.negative, 0, 0, from * to, to);
+      if (state[0]! > 0) return reach(state, rows.negative, 0, 0, 0, to);
+      probe.set(state);
+      advance(probe, firstRise * to, unread);
+      return probe[0]! > 0 ? reach(state, rows.negative, 0, 0, firstRise * to, to) : 0;
     },
   };
 }
 
-/** A current that leaves zero is looked at again after this share of the time. */
+/** Whether a current leaves zero shows after this share of the time: its slope may begin at zero too. */
 const firstRise = 1e-9;
 
 function watchedRows(stage: LinearStage, size: number): Rows {
