@@ -3,7 +3,7 @@ import type { DeckCheck, Result } from '../emit/resultSchema.ts';
 import type { Chart, DataPoint, EdgeLabel, Ink, LegendEntry, Mark } from './chart/Chart.ts';
 import { plainNumber, volts } from './figures.ts';
 import { bothLaws, inkOf, lawName } from './lawNames.ts';
-import { type IndexBand, indexBands } from './regionSlice.ts';
+import { type IndexBand, indexBand, regionSlices } from './regionSlice.ts';
 
 /** A plot whose largest index is above this is drawn in ratios: the edge at ½ would drown. */
 const linearUpTo = 3;
@@ -11,10 +11,11 @@ const linearUpTo = 3;
 /** Damping index over input voltage, adaptive against fixed, with what the simulation measured. */
 export function dampingChart(design: SizedDesign, result: Result): Chart {
   const { goal } = design.request.specification;
+  const slices = regionSlices(design.region);
   const bands = bothLaws(design).map((law) => ({
     law,
     ink: inkOf(law.law.kind),
-    band: indexBands(design, law),
+    band: slices.flatMap((slice) => indexBand(design, law, slice) ?? []),
   }));
   const largest = Math.max(goal.ceilingIndex, ...bands.flatMap(({ band }) => band.map(({ high }) => high)));
   const isLogarithmic = largest > linearUpTo;

@@ -22,7 +22,7 @@ export interface SummaryView {
 export function summaryOf(design: SizedDesign, result: Result): SummaryView {
   const standing = overallStanding(design, result);
   return {
-    verdict: verdict(design, result),
+    verdict: [verdict(design, result), ...reservations(result)].join(' '),
     standing,
     answers: [stability(design, result), law(design), build(design, result), agreement(result)],
     remarks: remarks(result),
@@ -45,6 +45,19 @@ function verdict(design: SizedDesign, { stability: { dampingIndexMin: least, at 
     return `Not stable ${reach(design)}: the damping index falls to ${plainNumber(least)} at ${place}; ½ is the edge.`;
   const aim = isBelowGoal(design, least) ? `, below the goal of ${plainNumber(goal)}` : '';
   return `Stable ${reach(design)}: damping index at least ${plainNumber(least)}, at ${place}${aim}.`;
+}
+
+/** What stands against the verdict, so that it is not read alone. */
+function reservations({ rules, simulation }: Result): string[] {
+  const others = rules.filter(
+    ({ id, severity, passed }) =>
+      severity === 'error' && !passed && id !== 'stability' && id !== 'damping-goal',
+  );
+  return [
+    ...(simulation === null ? ['Not simulated.'] : []),
+    ...(simulation?.passed === false ? ['The simulation disagrees.'] : []),
+    ...(others.length > 0 ? [`Failed: ${others.map(({ id }) => id).join(', ')}.`] : []),
+  ];
 }
 
 /** The least gain meets the goal exactly; the margin is for rounding in the last digits. */

@@ -7,6 +7,7 @@ import { reportPage } from '../../generator/report/reportPage.ts';
 import { CHROMIUM, describeWith } from '../spice/support/require.ts';
 import { idealSimulation, resultWith, sized } from '../unit/report/sampleDesign.ts';
 import { Chromium } from './support/Chromium.ts';
+import { labelsOutside } from './support/labelsOutside.ts';
 import { leastContrast } from './support/leastContrast.ts';
 
 const specification = `title: "bench supply <script>alert(1)</script> & 'quotes'"
@@ -52,7 +53,7 @@ describeWith([CHROMIUM], 'the report in a browser', () => {
     await browser.visit(target);
   }
 
-  async function asSeen(width: number, scheme: 'light' | 'dark'): Promise<void> {
+  async function asSeen(width: number, scheme: 'light' | 'dark', media = ''): Promise<void> {
     await browser.send('Emulation.setDeviceMetricsOverride', {
       width,
       height: 900,
@@ -60,7 +61,7 @@ describeWith([CHROMIUM], 'the report in a browser', () => {
       mobile: false,
     });
     await browser.send('Emulation.setEmulatedMedia', {
-      media: '',
+      media,
       features: [{ name: 'prefers-color-scheme', value: scheme }],
     });
   }
@@ -98,19 +99,14 @@ describeWith([CHROMIUM], 'the report in a browser', () => {
     expect(await browser.evaluate(shown)).toBe(true);
   });
 
-  it.each([360, 1280])('keeps every label of a plot inside the plot at %i px', async (width) => {
-    await asSeen(width, 'light');
+  it.each([
+    [360, ''],
+    [1280, ''],
+    [672, 'print'],
+  ])('keeps every label of a plot inside the plot, %i px %s', async (width, media) => {
+    await asSeen(width, 'light', media);
     await visit();
-    const outside = `[...document.querySelectorAll('figure > svg')]
-      .filter((svg) => svg.getBoundingClientRect().width > 0)
-      .flatMap((svg) => {
-        const edge = svg.getBoundingClientRect();
-        return [...svg.querySelectorAll('text')].filter((text) => {
-          const box = text.getBoundingClientRect();
-          return box.left < edge.left - 1 || box.right > edge.right + 1 || box.top < edge.top - 1 || box.bottom > edge.bottom + 1;
-        }).map((text) => text.textContent);
-      })`;
-    expect(await browser.evaluate(outside)).toEqual([]);
+    expect(await browser.evaluate(labelsOutside)).toEqual([]);
   });
 
   it.each(['light', 'dark'] as const)(

@@ -25,9 +25,9 @@ const rowHeight = 21;
 const barHeight = 11;
 const head = 26;
 /** For the names at the left. */
-const nameRoom = 96;
+const nameRoom = 88;
 /** For the figures at both ends of a bar. */
-const figureRoom = 70;
+const figureRoom = 82;
 
 /** As high as its rows need, whatever the format's own height. */
 export function layOutBars(chart: BarChart, format: Format): ChartView {

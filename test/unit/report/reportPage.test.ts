@@ -141,6 +141,8 @@ describe('the first screen', () => {
   it('says whether the simulation agreed, and that it was not run where it was not', async () => {
     expect(wordsOf(await pageOf(oneOutput, 0))).toContain('Agrees: all 18 figures are within their limits');
     expect(wordsOf(await pageOf(oneOutput, 0.05))).toMatch(/Disagrees: \d+ of 18 figures/);
+    expect(wordsOf(await pageOf(oneOutput, 0.05))).toMatch(/Stable over .* The simulation disagrees\./);
+    expect(wordsOf(await pageOf(oneOutput))).toMatch(/Stable over .* Not simulated\./);
     expect(wordsOf(await pageOf(oneOutput))).toContain('Not run: nothing below is checked by simulation.');
   });
 

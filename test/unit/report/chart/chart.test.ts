@@ -107,7 +107,7 @@ describe('a plot', () => {
   it('draws from corner to corner, and what lies beyond at its edge', () => {
     const { shapes } = layOutChart(chart, formats.half);
     const { d } = shapes.find(({ className }) => className === 'line adaptive')!;
-    expect(d).toBe('M40 280L436 26L436 26');
+    expect(d).toBe('M46 280L436 26L436 26');
   });
 
   it('draws no empty path', () => {
