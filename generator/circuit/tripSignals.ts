@@ -13,7 +13,7 @@ export interface TripSignal {
 export interface TripSignals {
   /** At the lowest and the highest input, at the largest duty there and the lightest load. */
   readonly ends: readonly [TripSignal, TripSignal];
-  /** Least current signal over the region; null where the load is not known. */
+  /** Least current signal over the region of the unit that has the least; null where the load is not known. */
   readonly leastSignal_V: number | null;
 }
 
@@ -28,9 +28,14 @@ export function tripSignals(design: SizedDesign): TripSignals {
   const at = (inputVoltage_V: number) => {
     const near = nearest(region.vertices, inputVoltage_V);
     const largest = near.reduce((a, b) => (b.duty > a.duty ? b : a));
-    return { inputVoltage_V, ramp_V: rampAtTrip(design, largest), signal_V: signalAtTrip(design, largest) };
+    return {
+      inputVoltage_V,
+      ramp_V: rampAtTrip(design, largest),
+      signal_V: signalAtTrip(design, largest, nominalUnit(design)),
+    };
   };
-  const signals = region.vertices.flatMap((vertex) => signalAtTrip(design, vertex) ?? []);
+  const least = faintestUnit(design);
+  const signals = region.vertices.flatMap((vertex) => signalAtTrip(design, vertex, least) ?? []);
   return {
     ends: [at(region.inputVoltage_V.low), at(region.inputVoltage_V.high)],
     leastSignal_V: signals.length > 0 ? Math.min(...signals) : null,
@@ -50,11 +55,36 @@ function rampAtTrip(design: SizedDesign, point: RegionPoint): number {
   return sizing.senseSlope_per_s * track_V * senseAttenuation(design) * point.duty * demand.period_s;
 }
 
-function signalAtTrip(design: SizedDesign, point: RegionPoint): number | null {
-  const { load_A, senseGain_V_per_A } = design.request.specification;
+/** What scales the current signal besides the operating point. */
+interface Unit {
+  readonly inductance_H: number;
+  readonly senseGain_V_per_A: number;
+  readonly period_s: number;
+}
+
+function nominalUnit({ corners, demand }: SizedDesign): Unit {
+  return {
+    inductance_H: corners.referenceInductance_H,
+    senseGain_V_per_A: corners.senseGain_V_per_A.nominal,
+    period_s: demand.period_s,
+  };
+}
+
+/** The least ripple, from the largest inductance at the highest frequency, sensed with the least gain. */
+function faintestUnit({ corners, request }: SizedDesign): Unit {
+  return {
+    inductance_H: corners.inductance_H.high,
+    senseGain_V_per_A: corners.senseGain_V_per_A.low,
+    period_s: 1 / request.specification.frequency_Hz.to.high,
+  };
+}
+
+/** The ripple is concave in the duty, so that its least over the region is at a vertex. */
+function signalAtTrip(design: SizedDesign, point: RegionPoint, unit: Unit): number | null {
+  const { load_A } = design.request.specification;
   if (load_A === null) return null;
-  const ripple_A = (point.up_V / design.corners.referenceInductance_H) * point.duty * design.demand.period_s;
+  const ripple_A = (point.up_V / unit.inductance_H) * point.duty * unit.period_s;
   const light_A = load_A.from.low;
   const peak_A = light_A >= ripple_A / 2 ? light_A + ripple_A / 2 : Math.sqrt(2 * light_A * ripple_A);
-  return senseGain_V_per_A.nominal * senseAttenuation(design) * peak_A;
+  return unit.senseGain_V_per_A * senseAttenuation(design) * peak_A;
 }

@@ -13,21 +13,22 @@ const extraDuty = 1.05;
 export function designAssumptions(design: SizedDesign): readonly Assumption[] {
   const { specification } = design.request;
   const { inductance } = specification;
-  const worst = design.chosen.extremes.min;
+  const { losses, load_A } = specification;
+  const instead = `the least damping index is this instead of ${design.chosen.extremes.min.dampingIndex.toPrecision(4)}`;
   const assumptions: Assumption[] = [];
   if (inductance?.kind === 'value' && inductance.atPeakLimit_H === null)
     assumptions.push({
       key: 'inductance.atPeakLimit',
-      value: indexWith(design, worst.at, saturationShare),
+      value: leastIndex(design, saturationShare, 1),
       unit: '',
-      reason: `not given: the inductor is taken not to saturate up to the peak limit; with 30 % less inductance there the least damping index is this instead of ${worst.dampingIndex.toPrecision(4)}`,
+      reason: `not given: the inductor is taken not to saturate up to the peak limit; with 30 % less inductance there ${instead}`,
     });
-  if (specification.losses === null)
+  if (losses === null || load_A === null)
     assumptions.push({
       key: 'losses',
-      value: indexWith(design, stretched(worst.at), 1),
+      value: leastIndex(design, 1, extraDuty),
       unit: '',
-      reason: `not given: the duty is that of a lossless stage; with 5 % more duty the least damping index is this instead of ${worst.dampingIndex.toPrecision(4)}`,
+      reason: `${losses === null ? 'not given' : 'given without a load, at which they could count'}: the duty is that of a lossless stage; with 5 % more duty ${instead}`,
     });
   if (inductance?.kind === 'value' && inductance.value_H.from.nominal !== inductance.value_H.to.nominal)
     assumptions.push({
@@ -48,7 +49,14 @@ export function designAssumptions(design: SizedDesign): readonly Assumption[] {
   return assumptions;
 }
 
-/** Damping index of the worst unit at a point with its ramp scaled by what the inductance leaves. */
+/** Least damping index of the worst unit over the region with its inductance reduced or its duties stretched. */
+function leastIndex(design: SizedDesign, inductanceShare: number, stretch: number): number {
+  return Math.min(
+    ...design.region.vertices.map((at) => indexWith(design, stretched(at, stretch), inductanceShare)),
+  );
+}
+
+/** The ramp scales with what the inductance leaves. */
 function indexWith(design: SizedDesign, at: RegionPoint, inductanceShare: number): number {
   const { chosen, corners, region, sizing } = design;
   const ramp_V = corners.at(at).lambda.low * sizing.spread.low * chosen.law.ramp_V(chosen.realisedGain, at);
@@ -57,7 +65,7 @@ function indexWith(design: SizedDesign, at: RegionPoint, inductanceShare: number
 }
 
 /** The same point with more duty, the swing as it was. */
-function stretched(at: RegionPoint): RegionPoint {
-  const duty = Math.min(1, at.duty * extraDuty);
+function stretched(at: RegionPoint, stretch: number): RegionPoint {
+  const duty = Math.min(1, at.duty * stretch);
   return { ...at, duty, up_V: at.swing_V * (1 - duty), down_V: at.swing_V * duty };
 }

@@ -1,7 +1,7 @@
 import type { SizedDesign } from '../circuit/SizedDesign.ts';
-import type { ConverterDeck } from '../emit/deck/converterDeck.ts';
+import { type ConverterDeck, converterDeck } from '../emit/deck/converterDeck.ts';
+import { converterPlan } from '../emit/deck/converterPlan.ts';
 import { cyclePlan } from '../emit/deck/perturbation.ts';
-import { deckSet } from '../emit/deckSet.ts';
 import { roundTo6Digits } from '../emit/text/roundTo6Digits.ts';
 import type { Waveforms } from '../spice/Deck.ts';
 import { affineCycleMap } from '../spice/measure/affineCycleMap.ts';
@@ -33,8 +33,9 @@ export function worstDeck({ chosen }: SizedDesign): string {
 
 /** The inductor current and the decay of its perturbation; none where that deck did not run. */
 export function currentCharts(design: SizedDesign, waveforms: Waveforms | undefined): readonly Chart[] {
-  const deck = deckSet(design).converters.get(worstDeck(design));
-  if (waveforms === undefined || deck === undefined) return [];
+  const planned = converterPlan(design).find(({ file }) => file === worstDeck(design));
+  if (waveforms === undefined || planned === undefined) return [];
+  const deck = converterDeck(design, planned.kind, planned.sized, planned.point);
   const decay = decayOf(deck, waveforms);
   return decay === null ? [] : [currentChart(design, decay), decayChart(design, decay)];
 }
@@ -89,7 +90,7 @@ function currentChart(design: SizedDesign, { deck, current, edges }: Decay): Cha
       { kind: 'line', ink: 'simulated', points: current },
       { kind: 'rings', ink, points: edges },
     ],
-    edgeLabels: [{ y: edges.at(-1)![1], ink, text: 'at clock edges' }],
+    edgeLabels: [{ y: edges.at(-1)![1], ink, text: 'clock edges' }],
     legend: [
       { mark: 'line', ink: 'simulated', text: 'simulated current' },
       { mark: 'rings', ink, text: 'its value at each clock edge' },

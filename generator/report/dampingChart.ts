@@ -1,9 +1,9 @@
-import type { SizedDesign, SizedLaw } from '../circuit/SizedDesign.ts';
+import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import type { DeckCheck, Result } from '../emit/resultSchema.ts';
 import type { Chart, DataPoint, EdgeLabel, Ink, LegendEntry, Mark } from './chart/Chart.ts';
 import { plainNumber, volts } from './figures.ts';
 import { bothLaws, inkOf, lawName } from './lawNames.ts';
-import { type IndexBand, indexBands } from './regionSlice.ts';
+import { type IndexBand, indexBand, regionSlices } from './regionSlice.ts';
 
 /** A plot whose largest index is above this is drawn in ratios: the edge at ½ would drown. */
 const linearUpTo = 3;
@@ -11,10 +11,11 @@ const linearUpTo = 3;
 /** Damping index over input voltage, adaptive against fixed, with what the simulation measured. */
 export function dampingChart(design: SizedDesign, result: Result): Chart {
   const { goal } = design.request.specification;
+  const slices = regionSlices(design.region);
   const bands = bothLaws(design).map((law) => ({
     law,
     ink: inkOf(law.law.kind),
-    band: indexBands(design, law),
+    band: slices.flatMap((slice) => indexBand(design, law, slice) ?? []),
   }));
   const largest = Math.max(goal.ceilingIndex, ...bands.flatMap(({ band }) => band.map(({ high }) => high)));
   const isLogarithmic = largest > linearUpTo;
@@ -40,7 +41,7 @@ export function dampingChart(design: SizedDesign, result: Result): Chart {
       ...worstNotes(design),
     ],
     edgeLabels: [
-      ...bands.map(({ band, law, ink }) => ({ y: band.at(-1)!.high, ink, text: shortName(law) })),
+      ...bands.map(({ band, ink }) => ({ y: band.at(-1)!.high, ink, text: ink })),
       { y: goal.dampingIndex, ink: 'goal', text: `goal ${plainNumber(goal.dampingIndex)}` },
       { y: goal.ceilingIndex, ink: 'ceiling', text: `ceiling ${plainNumber(goal.ceilingIndex)}` },
     ] satisfies EdgeLabel[],
@@ -55,10 +56,6 @@ export function dampingChart(design: SizedDesign, result: Result): Chart {
       ...(result.simulation === null ? [] : simulatedLegend(inkOf(design.chosen.law.kind))),
     ],
   };
-}
-
-function shortName({ law }: SizedLaw): string {
-  return law.kind === 'fixed' ? 'fixed' : 'adaptive, ∝ Vin';
 }
 
 function inputAxis({ region }: SizedDesign) {

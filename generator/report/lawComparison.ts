@@ -1,7 +1,7 @@
 import type { SizedDesign, SizedLaw } from '../circuit/SizedDesign.ts';
 import { cycleRatio, dampingQ, settlingCycles } from '../law/innerLoop.ts';
 import { figure, interval, plainNumber } from './figures.ts';
-import { bothLaws, gainText, lawName } from './lawNames.ts';
+import { bothLaws, gainText, inkOf } from './lawNames.ts';
 import { type TableView, tableView } from './table.ts';
 
 /** Closer than this two laws are as well damped: the next resistor value moves them more. */
@@ -68,14 +68,14 @@ export function comparisonTable(design: SizedDesign): TableView {
         interval(plainNumber(cycleRatio(min.dampingIndex)), plainNumber(cycleRatio(max.dampingIndex))),
       ),
       row('greatest Q at half the switching frequency', ({ extremes: { min } }) => quality(min.dampingIndex)),
-      row('cycles to settle to 1 %', cycles),
+      row('cycles to settle to 1\u00a0%', cycles),
       row('taken from a peak limit that sees the ramp', (law) => limitLoss(design, law)),
     ],
   );
 }
 
 function headOf({ chosen }: SizedDesign, kind: SizedLaw['law']['kind']): string {
-  return `${lawName(kind)}${chosen.law.kind === kind ? ', built' : ', for comparison'}`;
+  return `${inkOf(kind)}${chosen.law.kind === kind ? ', built' : ''}`;
 }
 
 function quality(index: number): string {

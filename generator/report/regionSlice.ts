@@ -51,33 +51,35 @@ export interface IndexBand {
 }
 
 /**
- * Damping index of a law at one input over outputs, loads and every corner; null where the region does not
- * reach that input.
+ * Damping index of a law over one slice: every output, load and corner; null where the slice is empty.
  */
 export function indexBand(
   { region, corners, sizing }: SizedDesign,
   { law, realisedGain }: SizedLaw,
-  inputVoltage_V: number,
+  slice: readonly RegionPoint[],
 ): IndexBand | null {
-  const points = regionSlice(region, inputVoltage_V);
-  if (points.length === 0) return null;
+  if (slice.length === 0) return null;
   const indices = (corner: 'low' | 'high') =>
-    points.map((point) => {
+    slice.map((point) => {
       const ramp_V =
         corners.at(point).lambda[corner] * sizing.spread[corner] * law.ramp_V(realisedGain, point);
       return dampingIndex(point.up_V, point.swing_V, ramp_V + ownRamp_V(region, corners, point)[corner]);
     });
-  return { inputVoltage_V, low: Math.min(...indices('low')), high: Math.max(...indices('high')) };
+  return {
+    inputVoltage_V: slice[0]!.inputVoltage_V,
+    low: Math.min(...indices('low')),
+    high: Math.max(...indices('high')),
+  };
 }
 
-/** Intervals into which the input range is divided for a band. */
+/** Intervals into which the input range is divided. */
 const steps = 60;
 
-/** The band of a law over the whole input range; kinks of the region are among its points. */
-export function indexBands(design: SizedDesign, law: SizedLaw): readonly IndexBand[] {
-  const { low, high } = design.region.inputVoltage_V;
+/** Slices over the whole input range, close enough for a curve; kinks of the region are among them. */
+export function regionSlices(region: OperatingRegion): readonly (readonly RegionPoint[])[] {
+  const { low, high } = region.inputVoltage_V;
   const even = Array.from({ length: steps + 1 }, (_, step) => low + ((high - low) * step) / steps);
-  const kinks = design.region.vertices.map((vertex) => vertex.inputVoltage_V);
+  const kinks = region.vertices.map((vertex) => vertex.inputVoltage_V);
   const inputs = [...new Set([...even, ...kinks])].sort((a, b) => a - b);
-  return inputs.flatMap((input) => indexBand(design, law, input) ?? []);
+  return inputs.map((input) => regionSlice(region, input));
 }

@@ -59,7 +59,7 @@ export function regionSentences({ region, request }: SizedDesign): readonly stri
   const output =
     outputVoltage_V === null
       ? `The output is not known: every duty from ${duties} is taken as possible at every input from ${input}.`
-      : `Inputs from ${input}, outputs from ${interval(volts(outputVoltage_V.low), volts(outputVoltage_V.high))}, duties from ${duties}.`;
+      : `Input ${input}, output ${interval(volts(outputVoltage_V.low), volts(outputVoltage_V.high))}, duty ${duties}.`;
   const load =
     request.specification.load_A === null ? ' Continuous conduction is taken; the load is not known.' : '';
   return [`${output}${load}`, ...region.cuts.map(cutSentence)];

@@ -22,7 +22,7 @@ export interface SummaryView {
 export function summaryOf(design: SizedDesign, result: Result): SummaryView {
   const standing = overallStanding(design, result);
   return {
-    verdict: verdict(design, result),
+    verdict: [verdict(design, result), ...reservations(result)].join(' '),
     standing,
     answers: [stability(design, result), law(design), build(design, result), agreement(result)],
     remarks: remarks(result),
@@ -43,8 +43,21 @@ function verdict(design: SizedDesign, { stability: { dampingIndexMin: least, at 
   const place = `${volts(at.inputVoltage_V)} in and ${percent(at.dutyRatio)} duty`;
   if (least <= 0.5)
     return `Not stable ${reach(design)}: the damping index falls to ${plainNumber(least)} at ${place}; ½ is the edge.`;
-  const aim = isBelowGoal(design, least) ? 'below the goal of' : 'goal';
-  return `Stable ${reach(design)}: damping index at least ${plainNumber(least)} (${aim} ${plainNumber(goal)}), least at ${place}.`;
+  const aim = isBelowGoal(design, least) ? `, below the goal of ${plainNumber(goal)}` : '';
+  return `Stable ${reach(design)}: damping index at least ${plainNumber(least)}, at ${place}${aim}.`;
+}
+
+/** What stands against the verdict, so that it is not read alone. */
+function reservations({ rules, simulation }: Result): string[] {
+  const others = rules.filter(
+    ({ id, severity, passed }) =>
+      severity === 'error' && !passed && id !== 'stability' && id !== 'damping-goal',
+  );
+  return [
+    ...(simulation === null ? ['Not simulated.'] : []),
+    ...(simulation?.passed === false ? ['The simulation disagrees.'] : []),
+    ...(others.length > 0 ? [`Failed: ${others.map(({ id }) => id).join(', ')}.`] : []),
+  ];
 }
 
 /** The least gain meets the goal exactly; the margin is for rounding in the last digits. */
@@ -63,21 +76,17 @@ export function pointText({ inputVoltage_V, outputVoltage_V, dutyRatio }: WorstP
 }
 
 function stability(design: SizedDesign, { stability: figures }: Result): Answer {
-  const {
-    dampingIndexMin: least,
-    dampingIndexMax: most,
-    at,
-    atMax,
-    cycleRatioMin,
-    settlingCyclesMax,
-  } = figures;
+  const { dampingIndexMin: least, dampingIndexMax: most, at, atMax, settlingCyclesMax } = figures;
+  const { goal } = design.request.specification;
   const settles =
-    settlingCyclesMax === null ? '' : ` A disturbance is down to 1 % within ${settlingCyclesMax} cycles.`;
+    settlingCyclesMax === null
+      ? ''
+      : ` A disturbance is down to 1\u00a0% within ${settlingCyclesMax} cycles.`;
   return {
     question: 'Damping',
     standing: least <= 0.5 ? 'bad' : isBelowGoal(design, least) ? 'caution' : 'good',
     sentences: [
-      `Least x ${plainNumber(least)} at ${pointText(at)}: cycle ratio ${plainNumber(cycleRatioMin)}.`,
+      `Least x ${plainNumber(least)} at ${pointText(at)}; goal ${plainNumber(goal.dampingIndex)}, edge ½.`,
       `Greatest x ${plainNumber(most)} at ${pointText(atMax)}.${settles}`,
     ],
   };

@@ -1,3 +1,4 @@
+import { limits } from '../circuit/boardOpamp/limits.ts';
 import { resetTimeNeeded_s } from '../circuit/boardOpamp/refusals.ts';
 import { bipolar, switchResistance_ohm } from '../circuit/DeviceModels.ts';
 import { currentSourceVoltages, rampFigures } from '../circuit/rampFigures.ts';
@@ -110,10 +111,10 @@ function circuitLines(design: SizedDesign): Line[] {
       partsSource,
     ],
     [
-      'time to reset to 1 %',
+      'time to reset to 1\u00a0%',
       `supply ${figure(demand.supply_V.low, 'V')}, highest frequency`,
       't = edges + ln 100 · Ron·C',
-      `10 ns + 4.605 · ${figure(switch_ohm, 'Ω')} · ${figure(sizing.totalCapacitance_F, 'F')}`,
+      `${figure(limits.resetOverhead_s, 's')} + ${digits(Math.log(100), 4)} · ${figure(switch_ohm, 'Ω')} · ${figure(sizing.totalCapacitance_F, 'F')}`,
       figure(reset, 's'),
       `≤ ${figure(demand.resetTime_s, 's')}`,
       partsSource,

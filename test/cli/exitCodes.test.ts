@@ -56,7 +56,7 @@ describe('exit 1', () => {
     await writeFile(path, broken);
     const { code, stdout } = await run(['simulate', 'set'], { cwd });
     expect(code).toBe(1);
-    expect(stdout).toMatch(/^failed +ramp-test\.cir .*slope/m);
+    expect(stdout).toMatch(/^failed +capacitor slope at /m);
   });
 
   it('when an edited deck does not even run', async () => {

@@ -106,11 +106,21 @@ export function candidate(
  * One per cent of excess weighs as much as a factor of 1.5 in capacitance.
  */
 function cost(excess: number, amplitudeShare: number, capacitance_F: number, current_A: number): number {
-  const octaves = (ratio: number) => Math.abs(Math.log2(ratio));
   return (
     60 * excess +
-    octaves(capacitance_F / preferences.capacitance_F) +
     octaves(amplitudeShare / preferences.amplitudeShare) +
+    preferenceCost(capacitance_F, current_A)
+  );
+}
+
+/** The part of the cost that capacitor and set resistor decide alone; the rest is never negative. */
+export function preferenceCost(capacitance_F: number, current_A: number): number {
+  return (
+    octaves(capacitance_F / preferences.capacitance_F) +
     0.5 * octaves(current_A / preferences.chargingCurrent_A)
   );
+}
+
+function octaves(ratio: number): number {
+  return Math.abs(Math.log2(ratio));
 }

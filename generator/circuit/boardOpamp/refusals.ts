@@ -41,7 +41,9 @@ export function refuseNearest(
   const distance = (broken: readonly Bound[]) =>
     broken.reduce((sum, { left, right }) => sum + Math.log(left / Math.max(right, 1e-3 * left)), 0);
   const nearest = sets.map(brokenOf).reduce((a, b) => (distance(b) < distance(a) ? b : a));
-  return nearest.map((bound) => problemOf({ ...bound, ...wordsOf(bound.id, demand) }, request));
+  return nearest.map((bound) =>
+    problemOf({ ...bound, ...wordsOf(bound.id, demand, sets[0]!.headroom) }, request),
+  );
 }
 
 function problemOf(check: Inequality, request: ReadSpecification): Problem {
@@ -130,7 +132,7 @@ function current(demand: RampDemand, room: Headroom): Inequality {
   const least = demand.capacitance_F ?? limits.capacitanceLow_F;
   const amplitude = Math.max(limits.amplitudeShareLow * room.ramp_V, wantedAmplitude_V(demand));
   return {
-    ...wordsOf('current high', demand),
+    ...wordsOf('current high', demand, room),
     inequality: 'charging current of the least capacitor at the least amplitude ≤ what the build carries',
     left: ((least + nodeCapacitance_F) * amplitude) / demand.riseTime_s,
     right: limits.chargingCurrentHigh_A,
@@ -140,8 +142,8 @@ function current(demand: RampDemand, room: Headroom): Inequality {
 type Words = Omit<Inequality, 'left' | 'right'>;
 
 /** What a bound of a set of parts is called, and which key of the specification moves it. */
-function wordsOf(id: Bound['id'], { capacitance_F }: RampDemand): Words {
-  const free = capacitance_F === null;
+function wordsOf(id: Bound['id'], demand: RampDemand, room: Headroom): Words {
+  const free = demand.capacitance_F === null;
   switch (id) {
     case 'amplitude high':
       return {
@@ -158,12 +160,7 @@ function wordsOf(id: Bound['id'], { capacitance_F }: RampDemand): Words {
         fix: 'choose a finer resistor series',
       };
     case 'current high':
-      return {
-        key: free ? 'frequency' : 'ramp.capacitance',
-        inequality: 'charging current at the highest input ≤ what the build carries',
-        unit: 'A',
-        fix: 'lower the frequency, or ramp.capacitance where it is given',
-      };
+      return { ...currentWords(demand, room), unit: 'A' };
     case 'current low':
       return {
         key: free ? 'input' : 'ramp.capacitance',
@@ -200,4 +197,18 @@ function wordsOf(id: Bound['id'], { capacitance_F }: RampDemand): Words {
         fix: 'narrow the input range: offsets weigh most where the input is lowest',
       };
   }
+}
+
+/** A steep ramp takes its current at any frequency; a small amplitude only in a short period. */
+function currentWords(demand: RampDemand, room: Headroom): Omit<Words, 'unit'> {
+  const inequality = 'charging current at the highest input ≤ what the build carries';
+  if (demand.capacitance_F !== null)
+    return { key: 'ramp.capacitance', inequality, fix: 'lower ramp.capacitance, or leave it free' };
+  if (wantedAmplitude_V(demand) > limits.amplitudeShareLow * room.ramp_V)
+    return {
+      key: 'senseGain',
+      inequality,
+      fix: 'raise the inductance or lower senseGain: the ramp is steep',
+    };
+  return { key: 'frequency', inequality, fix: 'lower the frequency' };
 }

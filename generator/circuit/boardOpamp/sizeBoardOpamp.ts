@@ -4,7 +4,7 @@ import type { RampDemand } from '../../ramp/RampDemand.ts';
 import type { ReadSpecification } from '../../spec/readSpecification.ts';
 import { nodeCapacitance_F } from '../DeviceModels.ts';
 import { boundsOf, isBroken } from './bounds.ts';
-import { type BoardOpampSizing, candidate, currentPerVolt } from './candidate.ts';
+import { type BoardOpampSizing, candidate, currentPerVolt, preferenceCost } from './candidate.ts';
 import { chooseDivider, type Divider } from './divider.ts';
 import { type Headroom, headroom } from './headroom.ts';
 import { limits } from './limits.ts';
@@ -21,14 +21,37 @@ export function sizeBoardOpamp(demand: RampDemand, request: ReadSpecification): 
   const refused = refusals(demand, room, request);
   if (refused.length > 0) return failure(refused);
   const divider = chooseDivider(demand, room.setVoltage_V);
-  const sets = timingCapacitors(demand).flatMap((capacitance_F) =>
-    setResistors(demand, divider, room, capacitance_F).map((set_ohm) =>
-      candidate(demand, divider, room, capacitance_F, set_ohm),
-    ),
+  const { best, broken } = search(demand, divider, room);
+  return best === null ? failure(refuseNearest(demand, broken, request)) : success(best);
+}
+
+interface SearchResult {
+  readonly best: BoardOpampSizing | null;
+  /** Sets that were looked at and break a bound. */
+  readonly broken: readonly BoardOpampSizing[];
+}
+
+/**
+ * Every pair of capacitor and set resistor, cheapest first by what its preferences alone cost: once that
+ * is more than the best set costs in all, no later pair can be better.
+ */
+function search(demand: RampDemand, divider: Divider, room: Headroom): SearchResult {
+  const pairs = timingCapacitors(demand).flatMap((capacitance_F) =>
+    setResistors(demand, divider, room, capacitance_F).map((set_ohm) => ({
+      capacitance_F,
+      set_ohm,
+      floor: preferenceCost(capacitance_F, currentPerVolt(divider, set_ohm) * demand.track_V.high),
+    })),
   );
-  const sound = sets.filter((set) => !boundsOf(demand, set).some(isBroken));
-  if (sound.length === 0) return failure(refuseNearest(demand, sets, request));
-  return success(sound.reduce((a, b) => (b.cost < a.cost ? b : a)));
+  const broken: BoardOpampSizing[] = [];
+  let best: BoardOpampSizing | null = null;
+  for (const pair of pairs.sort((a, b) => a.floor - b.floor)) {
+    if (best !== null && pair.floor >= best.cost) break;
+    const set = candidate(demand, divider, room, pair.capacitance_F, pair.set_ohm);
+    if (boundsOf(demand, set).some(isBroken)) broken.push(set);
+    else if (best === null || set.cost < best.cost) best = set;
+  }
+  return { best, broken };
 }
 
 export function timingCapacitors(demand: RampDemand): readonly number[] {

@@ -17,23 +17,30 @@ export function simulationRow(simulation: Simulation | null, paint: Paint): stri
   return row('failed', `simulation: ${failed} of ${decks.length} figures disagree; ${extent}`, paint.bad);
 }
 
-/** Every figure that was measured; a failed line starts with the word. */
+/** Every figure that was measured, deck by deck; a failed line starts with the word. */
 export function simulationView(
   { simulation }: Result,
   { directory, paint }: { readonly directory: string; readonly paint: Paint },
 ): string {
-  const head = row('folder', printable(directory));
-  const checks = (simulation?.decks ?? []).flatMap((check) =>
-    check.passed ? row('agrees', checkText(check)) : row('failed', checkText(check), paint.bad),
-  );
-  return `${[...head, ...checks, ...simulationRow(simulation, paint)].join('\n')}\n`;
+  const checks = simulation?.decks ?? [];
+  const files = [...new Set(checks.map(({ file }) => file))];
+  const lines = [
+    ...row('folder', printable(directory)),
+    ...files.flatMap((file) => [
+      paint.strong(file),
+      ...checks.filter((check) => check.file === file).flatMap((check) => checkRow(check, paint)),
+    ]),
+    ...simulationRow(simulation, paint),
+  ];
+  return `${lines.join('\n')}\n`;
 }
 
-function checkText({ file, quantity, predicted, measured, unit, at }: DeckCheck): string {
+function checkRow({ quantity, predicted, measured, unit, at, passed }: DeckCheck, paint: Paint): string[] {
   const output = at.outputVoltage_V === null ? '' : `, ${volts(at.outputVoltage_V)} out`;
   const where = together(`${volts(at.inputVoltage_V)} in${output}`);
-  const values = `${figure(measured, unit)} measured, ${figure(predicted, unit)} predicted`;
-  return `${file} ${quantity} at ${where}: ${together(values)}`;
+  const values = together(`${figure(measured, unit)}, predicted ${figure(predicted, unit)}`);
+  const text = `${quantity} at ${where}: ${values}`;
+  return passed ? row('agrees', text) : row('failed', text, paint.bad);
 }
 
 function deviation({ errorRatio, limit, quantity, file, unit }: DeckCheck): string {

@@ -5,7 +5,7 @@ import type { Motion, Watched } from './Motion.ts';
 /** Times nearer than this share of the range are one. */
 const resolution = 4e-16;
 /** Relative size of the first term of the series that is left out. */
-const truncation = 1e-18;
+const truncation = 1e-17;
 
 type Rows = Readonly<Record<Watched | 'negative', Float64Array>>;
 
@@ -66,16 +66,16 @@ export function linearMotion(stage: LinearStage, interval: LinearInterval): Moti
   }
 
   function advance(state: Float64Array, time: number, integral: Float64Array): void {
-    if (!(time > 0)) return;
-    const stretches = Math.max(1, Math.ceil(norm * time));
+    if (time === 0) return;
+    const stretches = Math.max(1, Math.ceil(norm * Math.abs(time)));
     for (let count = 0; count < stretches; count += 1) stretch(state, time / stretches, integral);
   }
 
   /**
    * First time at which row·x + slope·t ≥ level.
    *
-   * From the left by f + f′τ + Mτ²/2 = 0, M ≥ |f″| over the next 1/‖A‖: Newton's method that never steps
-   * over the first root, and converges as fast.
+   * With M ≥ |f″| over the next 1/‖A‖, f cannot cross before f + f′τ + Mτ²/2 does. Steps of that length are
+   * taken until f is sure to rise through its only root in the stretch ahead.
    */
   function reach(
     state: Float64Array,
@@ -87,22 +87,39 @@ export function linearMotion(stage: LinearStage, interval: LinearInterval): Moti
   ): number {
     probe.set(state);
     advance(probe, from, unread);
-    const rowNorm = dualNorm(row, weights);
+    const rowBend = dualNorm(row, weights) * norm * Math.E;
     for (let time = from; ; ) {
       const short = level - slope * time - dot(row, probe);
+      const ahead = Math.min(1 / norm, to - time);
       if (short <= 0) return time;
+      if (!(ahead > 0)) return Number.POSITIVE_INFINITY;
       differentiate(probe);
       const steepness = dot(row, slopes) + slope;
-      const bend = rowNorm * norm * Math.E * weightedNorm(slopes, weights);
-      const step = Math.min(
-        (2 * short) / (steepness + Math.sqrt(steepness * steepness + 2 * bend * short)),
-        1 / norm,
-        to - time,
-      );
-      if (time >= to) return Number.POSITIVE_INFINITY;
-      if (time + step <= time || step <= resolution * to) return step < to - time ? time : to;
+      const bend = rowBend * weightedNorm(slopes, weights);
+      if (steepness > 3 * bend * ahead && steepness * ahead > 1.5 * short)
+        return refine(row, slope, level, time);
+      const safe = (2 * short) / (steepness + Math.sqrt(steepness * steepness + 2 * bend * short));
+      if (safe >= to - time && ahead === to - time) return Number.POSITIVE_INFINITY;
+      const step = Math.min(safe, ahead);
+      if (step <= resolution * to) return time;
       advance(probe, step, unread);
       time += step;
+    }
+  }
+
+  /**
+   * Newton's method from `probe` at a time, where the slope changes by less than a third up to the root:
+   * each step is then at most a quarter of the one before, until it is rounding.
+   */
+  function refine(row: Float64Array, slope: number, level: number, from: number): number {
+    let time = from;
+    for (let last = Number.POSITIVE_INFINITY; ; ) {
+      differentiate(probe);
+      const step = (level - slope * time - dot(row, probe)) / (dot(row, slopes) + slope);
+      if (!(Math.abs(step) < last / 2) || Math.abs(step) <= resolution * time) return time;
+      advance(probe, step, unread);
+      time += step;
+      last = Math.abs(step);
     }
   }
 
@@ -113,15 +130,15 @@ export function linearMotion(stage: LinearStage, interval: LinearInterval): Moti
       return reach(state, rows[watched], slope, wanted, from, to);
     },
     timeToZero(state, to) {
-      differentiate(state);
-      if (state[0]! <= 0 && slopes[0]! <= 0) return 0;
-      const from = state[0]! <= 0 ? firstRise : 0;
-      return reach(state, rows.negative, 0, 0, from * to, to);
+      if (state[0]! > 0) return reach(state, rows.negative, 0, 0, 0, to);
+      probe.set(state);
+      advance(probe, firstRise * to, unread);
+      return probe[0]! > 0 ? reach(state, rows.negative, 0, 0, firstRise * to, to) : 0;
     },
   };
 }
 
-/** A current that leaves zero is looked at again after this share of the time. */
+/** Whether a current leaves zero shows after this share of the time: its slope may begin at zero too. */
 const firstRise = 1e-9;
 
 function watchedRows(stage: LinearStage, size: number): Rows {

@@ -1,6 +1,7 @@
 import type { CycleRecord, CycleRun } from './CycleRun.ts';
 import { runCycles } from './runCycles.ts';
 import { solveLinear } from './solveLinear.ts';
+import { rampSlope, switching } from './switching.ts';
 
 /** What the control level is to be found for. */
 export type Wanted =
@@ -22,8 +23,10 @@ const halvings = 30;
 const converged = 2e-14;
 /** Of the unknown it moves: the error of a central difference is its square. */
 const differenceStep = 1e-5;
-/** Cycles run before another attempt where the first does not converge: a stable orbit draws them in. */
-const warmUps = [0, 50, 1000, 20_000];
+/** Duties at which the comparator is made to trip where the first attempt does not converge. */
+const duties = [0.5, 0.25, 0.75, 0.1, 0.9];
+/** Cycles run before a last attempt: a stable orbit draws them in. */
+const warmUps = [50, 1000, 20_000];
 
 /**
  * The periodic orbit that Newton's method finds from the run's initial state and control level.
@@ -32,13 +35,29 @@ const warmUps = [0, 50, 1000, 20_000];
  * @returns null where there is none to be found: no orbit of one cycle reaches what is wanted
  */
 export function periodicOrbit(run: CycleRun, wanted?: Wanted): PeriodicOrbit | null {
-  for (const cycles of warmUps) {
-    const warmed = cycles === 0 ? run.initial : lastState(runCycles({ ...run, cycles, events: [] }));
-    const start = wanted === undefined ? [...warmed] : [...warmed, run.control_A];
+  for (const state of startingStates(run)) {
+    const start = wanted === undefined ? [...state] : [...state, run.control_A];
     const found = newton((unknowns) => residual(run, wanted, unknowns), start);
     if (found !== null) return orbitOf(run, wanted, found);
   }
   return null;
+}
+
+function* startingStates(run: CycleRun): Generator<readonly number[]> {
+  yield run.initial;
+  for (const duty of duties) yield run.initial.with(0, currentForDuty(run, duty));
+  for (const cycles of warmUps) yield lastState(runCycles({ ...run, cycles, events: [] }));
+}
+
+/** The current at the clock edge from which the first on-time would have about this duty [A]. */
+function currentForDuty(run: CycleRun, duty: number): number {
+  const circuit = switching(run, run.timing);
+  const onTime_s = duty * circuit.latest_s;
+  const level_A = Math.min(run.control_A, run.limit?.level_A ?? Number.POSITIVE_INFINITY);
+  const state = Float64Array.from(run.initial.with(0, level_A));
+  const ramp_A = rampSlope(circuit, state) * onTime_s;
+  circuit.on.advance(state, onTime_s, new Float64Array(state.length));
+  return level_A - ramp_A - (state[0]! - level_A);
 }
 
 function lastState({ edges, onTime_s }: CycleRecord): number[] {

@@ -3,7 +3,7 @@ import type { Format } from './formats.ts';
 import { type Scale, scaleOf } from './scale.ts';
 
 /** What the axes need around the plot. */
-const edges = { left: 40, top: 26, bottom: 40 } as const;
+const edges = { left: 46, top: 26, bottom: 40 } as const;
 /** Least distance between ticks. */
 const spacing = { x: 90, y: 50 } as const;
 

@@ -24,13 +24,15 @@ export interface BarChart {
 const rowHeight = 21;
 const barHeight = 11;
 const head = 26;
+/** For the names at the left. */
+const nameRoom = 88;
 /** For the figures at both ends of a bar. */
-const figureRoom = 56;
+const figureRoom = 82;
 
 /** As high as its rows need, whatever the format's own height. */
 export function layOutBars(chart: BarChart, format: Format): ChartView {
   const height = head + chart.bars.length * rowHeight + 14;
-  const from = 128 + figureRoom;
+  const from = nameRoom + figureRoom;
   const to = format.width - figureRoom - 4;
   const reach = Math.max(...chart.bars.flatMap(({ low, high }) => [Math.abs(low), Math.abs(high)]));
   const scale = scaleOf({ quantity: '', unit: '%', low: -reach, high: reach }, 4);

@@ -6,7 +6,7 @@ import { markShapes, markTexts } from './markViews.ts';
 import { spreadLabels } from './spreadLabels.ts';
 
 /** Height of a line of labels at the right edge. */
-const lineHeight = 16;
+const lineHeight = 17;
 
 /** A plot on a sheet of a format: paths and texts with their classes. */
 export function layOutChart(chart: Chart, format: Format): ChartView {

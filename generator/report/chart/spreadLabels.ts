@@ -1,6 +1,8 @@
 /**
- * Heights for labels in a column: each as near to its own as a least distance allows, inside the bounds.
+ * Heights for labels in a column: as near to their own as a least distance allows, inside the bounds.
  *
+ * Less the distance times the rank, the heights have only to be in order, and the nearest ordered heights
+ * are the means of pooled neighbours (isotonic regression).
  * @param wanted heights, in any order
  * @returns heights in the order given
  */
@@ -10,28 +12,26 @@ export function spreadLabels(
   bounds: { readonly low: number; readonly high: number },
 ): readonly number[] {
   const order = wanted.map((_, index) => index).sort((a, b) => wanted[a]! - wanted[b]! || a - b);
-  const placed = order.map((index) => Math.min(bounds.high, Math.max(bounds.low, wanted[index]!)));
-  for (let pass = 0; pass < 100 && pushApart(placed, distance); pass += 1);
-  const overrun = Math.max(0, (placed.at(-1) ?? 0) - bounds.high);
-  const shifted = placed.map((height) => height - overrun);
-  for (let rank = shifted.length - 2; rank >= 0; rank -= 1)
-    shifted[rank] = Math.min(shifted[rank]!, shifted[rank + 1]! - distance);
-  const result: number[] = [];
+  const ordered = pooled(order.map((index, rank) => wanted[index]! - rank * distance));
+  const highest = bounds.high - (wanted.length - 1) * distance;
+  const placed: number[] = [];
   order.forEach((index, rank) => {
-    result[index] = shifted[rank]!;
+    placed[index] = Math.max(bounds.low, Math.min(highest, ordered[rank]!)) + rank * distance;
   });
-  return result;
+  return placed;
 }
 
-/** One pass over the neighbours, both giving way alike; false when all stood far enough apart. */
-function pushApart(heights: number[], distance: number): boolean {
-  let moved = false;
-  for (let rank = 1; rank < heights.length; rank += 1) {
-    const lack = distance - (heights[rank]! - heights[rank - 1]!);
-    if (lack <= 1e-6) continue;
-    heights[rank - 1]! -= lack / 2;
-    heights[rank]! += lack / 2;
-    moved = true;
+/** The nearest values that never fall, by least squares: neighbours out of order share their mean. */
+function pooled(values: readonly number[]): readonly number[] {
+  const pools: { mean: number; size: number }[] = [];
+  for (const value of values) {
+    let pool = { mean: value, size: 1 };
+    for (let last = pools.at(-1); last !== undefined && last.mean > pool.mean; last = pools.at(-1)) {
+      const size = last.size + pool.size;
+      pool = { mean: (last.mean * last.size + pool.mean * pool.size) / size, size };
+      pools.pop();
+    }
+    pools.push(pool);
   }
-  return moved;
+  return pools.flatMap(({ mean, size }) => Array.from({ length: size }, () => mean));
 }

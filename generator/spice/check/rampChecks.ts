@@ -1,7 +1,9 @@
 import { rampFigures } from '../../circuit/rampFigures.ts';
 import type { SizedDesign } from '../../circuit/SizedDesign.ts';
-import { clockTiming } from '../../emit/deck/deckTiming.ts';
+import { type ClockTiming, clockTiming } from '../../emit/deck/deckTiming.ts';
+import { stepsPerPeriod } from '../../emit/deck/rampTestDeck.ts';
 import type { DeckSet } from '../../emit/deckSet.ts';
+import type { Waveforms } from '../Deck.ts';
 import { slopeBetween } from '../measure/slopeBetween.ts';
 import { valueAt } from '../measure/valueAt.ts';
 import type { Check, CheckedDeck } from './Check.ts';
@@ -12,6 +14,9 @@ const slopeLimit = 0.02;
 const residualLimit = 0.01;
 /** Stretch of the rise over which the slope is taken: clear of clock edges and the buffer's lag. */
 const stretch = { from: 0.2, to: 0.95 };
+
+/** Share of the rise over which its end is taken for straight. */
+const straightEnd = 0.02;
 
 /** Slope, amplitude and residual of the ramp at lowest, middle and highest input. */
 export function rampChecks(design: SizedDesign, decks: DeckSet): CheckedDeck {
@@ -64,7 +69,7 @@ function levelChecks(
       limit: slopeLimit,
       predicted: figures.amplitude_V,
       errorScale: figures.amplitude_V,
-      measure: ({ time_s, vectors }) => valueAt(time_s, vectors['v(ramp)']!, riseEnd),
+      measure: (waveforms) => peakAt(riseEnd, timing, waveforms),
     },
     {
       at,
@@ -76,4 +81,17 @@ function levelChecks(
       measure: ({ time_s, vectors }) => valueAt(time_s, vectors['v(ramp)']!, resetEnd),
     },
   ];
+}
+
+/**
+ * The ramp when the clock begins to reset it, carried on from the time step before.
+ *
+ * An engine that prints at even steps only shows nothing between the last one of the rise and the first one
+ * of the reset.
+ */
+function peakAt(riseEnd: number, { period_s, rise_s }: ClockTiming, { time_s, vectors }: Waveforms): number {
+  const ramp = vectors['v(ramp)']!;
+  const last = riseEnd - period_s / stepsPerPeriod;
+  const slope = slopeBetween(time_s, ramp, last - straightEnd * rise_s, last);
+  return valueAt(time_s, ramp, last) + slope * (riseEnd - last);
 }
