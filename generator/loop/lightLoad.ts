@@ -3,6 +3,7 @@ import type { KnownCorners } from '../law/loopCorners.ts';
 import { extremesOver } from '../region/extremesOver.ts';
 import type { OperatingRegion, RegionPoint } from '../region/OperatingRegion.ts';
 import type { Specification } from '../spec/Specification.ts';
+import { lightLoadRampForAll } from './cycle/lightLoadRamp.ts';
 
 /** Where conduction stops being continuous, and what that means for the figures. */
 export interface LightLoad {
@@ -56,21 +57,6 @@ function buckNotes(region: OperatingRegion, reached: boolean | null): string[] {
   const ratio = extremesOver(region, (point) => point.outputVoltage_V / point.inputVoltage_V).max.value;
   if (ratio <= discontinuousStabilityRatio) return [];
   return [
-    `There a buck without a ramp is unstable at low frequency above Vout/Vin = 2/3; ${leastDiscontinuousRamp.toPrecision(2)} of the down slope cures it, and every law here gives more.`,
+    `There a buck without a ramp is unstable at low frequency above Vout/Vin = 2/3; ${lightLoadRampForAll.share.toPrecision(2)} of the down slope cures it, and every law here gives more.`,
   ];
 }
-
-/**
- * Least ramp, as a share of the down slope, with which a buck in discontinuous conduction is stable at low
- * frequency for every ratio of output to input: 3/2 − √2 = 0.0858.
- *
- * With M = Vout/Vin, μ = ma/m2 and constant control the load current is I ∝ m1/(M·(m1 + ma)²). On a resistive
- * load the slow pole is in the right half-plane where d(ln I)/d(ln M) > 1, ma held:
- *
- *   (3 − μ)·M² − (5 − 2μ)·M + 2 < 0
- *
- * Its roots are 2/3 and 1 at μ = 0, and meet at μ = 3/2 − √2.
- * @source Erickson & Maksimović, Fundamentals of Power Electronics, discontinuous mode: 2/3 and 0.086 (from
- *   memory); derived again as above
- */
-export const leastDiscontinuousRamp = 1.5 - Math.SQRT2;
