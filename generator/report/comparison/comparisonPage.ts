@@ -17,6 +17,7 @@ import { lawTable, neededRampTable } from './comparisonTables.ts';
 import { indexMaps, mapScale } from './indexMaps.ts';
 import { currentCurves, indexChart } from './lawCurves.ts';
 import { lineStepChart } from './lineStepChart.ts';
+import { neededRampCharts } from './neededRampChart.ts';
 import { comparisonSummary } from './summary.ts';
 
 /** Maps have nothing beside them. */
@@ -43,8 +44,9 @@ export async function comparisonPage(comparison: Comparison): Promise<string> {
     currents: currentCurves(comparison).map((chart) => figureViews(chart, formats.half)),
     lineStep: step === null ? [] : [figureViews(lineStepChart(step), formats.wide)],
     lineStepNote:
-      'The control level and the output voltage are held, so that what is seen is the current loop alone: how far the mean inductor current of a nominal unit moves, and in how many cycles. Computed exactly from cycle to cycle, conduction taken as continuous.',
+      'The control level and the output voltage are held, so that what is seen is the current loop alone: how far the mean inductor current of a nominal unit moves, and in how many cycles. Where the duty is at its maximum, the current climbs no faster than that allows. Computed exactly from cycle to cycle, conduction taken as continuous.',
     neededRamp: neededRampTable(comparison),
+    neededCurves: neededRampCharts(comparison).map((chart) => figureViews(chart, formats.half)),
     requirements: requirementTable(request),
     region: regionSentences(comparison),
     assumptions: assumptionTable({

@@ -2,9 +2,9 @@ import type { Comparison } from '../../loop/Comparison.ts';
 import type { ComparedLaw } from '../../loop/compareLaws.ts';
 import { lineResponse_A_per_V } from '../../loop/lineResponse.ts';
 import { type LoopUnit, outputLimit_A, peakLimit_A } from '../../loop/peakLimits.ts';
-import type { RegionPoint } from '../../region/OperatingRegion.ts';
+import type { OperatingRegion, RegionPoint } from '../../region/OperatingRegion.ts';
 import type { Axis, Chart, DataPoint, EdgeLabel, Ink, Mark } from '../chart/Chart.ts';
-import { plainNumber, volts } from '../figures.ts';
+import { figure, plainNumber, volts } from '../figures.ts';
 import { lawName } from '../lawNames.ts';
 import { greatestIndex } from './indexMaps.ts';
 import { conditionsOf, inputsOf, regionColumns } from './regionColumns.ts';
@@ -17,84 +17,79 @@ export function lawInk({ law }: Pick<ComparedLaw, 'law'>): Ink {
   return law.kind === 'vin' ? 'adaptive' : law.kind;
 }
 
-interface Band {
-  readonly inputVoltage_V: number;
-  readonly low: number;
-  readonly high: number;
-}
+/** Which of several values at one input stands for all of them. */
+type Representative = (values: readonly number[]) => number;
 
-/** Least and greatest of a figure over input, every output, load and unit. */
-function bandsOf({ region }: Comparison, figure: (at: RegionPoint) => number): readonly Band[] {
+const least: Representative = (values) => Math.min(...values);
+const greatest: Representative = (values) => Math.max(...values);
+const largest: Representative = (values) => values.reduce((a, b) => (Math.abs(b) > Math.abs(a) ? b : a));
+
+/** A figure over input: of all outputs, loads and units the one that counts. */
+function curveOf(
+  { region }: Comparison,
+  figure: (at: RegionPoint) => number,
+  pick: Representative,
+): DataPoint[] {
   const inputs = inputsOf(region, steps);
   const columns = conditionsOf(region).flatMap((condition) =>
     regionColumns(region, condition, { inputs, rows }),
   );
-  return inputs.flatMap((inputVoltage_V) => {
+  return inputs.flatMap((input): DataPoint[] => {
     const values = columns
-      .filter((column) => column.inputVoltage_V === inputVoltage_V)
+      .filter(({ inputVoltage_V }) => inputVoltage_V === input)
       .flatMap(({ points }) => points.map(figure));
-    return values.length === 0
-      ? []
-      : [{ inputVoltage_V, low: Math.min(...values), high: Math.max(...values) }];
+    return values.length === 0 ? [] : [[input, pick(values)]];
   });
 }
 
 interface Curve {
   readonly law: ComparedLaw;
-  readonly bands: readonly Band[];
+  readonly points: readonly DataPoint[];
+}
+
+interface CurveHead extends Pick<Chart, 'id' | 'title'> {
+  readonly y: Pick<Axis, 'quantity' | 'unit'>;
+  readonly pick: Representative;
 }
 
 /** A figure of each law over the input voltage, or null where no law has it. */
 function curveChart(
   comparison: Comparison,
-  head: Pick<Chart, 'id' | 'title'> & { readonly y: Pick<Axis, 'quantity' | 'unit'> },
+  { id, title, y, pick }: CurveHead,
   figureOf: (law: ComparedLaw) => ((at: RegionPoint) => number) | null,
 ): Chart | null {
   const { low, high } = comparison.region.inputVoltage_V;
   if (!(high > low)) return null;
   const curves = comparison.laws.flatMap((law): Curve[] => {
     const figure = figureOf(law);
-    return figure === null ? [] : [{ law, bands: bandsOf(comparison, figure) }];
+    return figure === null ? [] : [{ law, points: curveOf(comparison, figure, pick) }];
   });
   if (curves.length === 0) return null;
   return {
-    ...head,
-    description: curves.map((curve) => describe(curve, head.y)).join(' '),
+    id,
+    title,
+    description: curves.map((curve) => describe(curve, y)).join(' '),
     x: { quantity: 'input voltage Vin', unit: 'V', low, high },
-    y: { ...head.y, ...room(curves) },
-    marks: curves.flatMap(curveMarks),
+    y: { ...y, ...room(curves) },
+    marks: curves.map(({ law, points }) => ({ kind: 'line', ink: lawInk(law), points })),
     edgeLabels: curves.map(
-      ({ law, bands }): EdgeLabel => ({ y: bands.at(-1)!.high, ink: lawInk(law), text: law.law.kind }),
+      ({ law, points }): EdgeLabel => ({ y: points.at(-1)![1], ink: lawInk(law), text: law.law.kind }),
     ),
     legend: [],
   };
 }
 
 function room(curves: readonly Curve[]): { low: number; high: number } {
-  const values = curves.flatMap(({ bands }) => bands.flatMap(({ low, high }) => [low, high]));
+  const values = curves.flatMap(({ points }) => points.map(([, value]) => value));
   const [low, high] = [Math.min(...values), Math.max(...values)];
   const margin = Math.max(0.08 * (high - low), 1e-3 * Math.max(Math.abs(low), Math.abs(high)), 1e-9);
   return { low: low - margin, high: high + margin };
 }
 
-function curveMarks({ law, bands }: Curve): Mark[] {
-  const ink = lawInk(law);
-  const side = (pick: 'low' | 'high') => bands.map((band): DataPoint => [band.inputVoltage_V, band[pick]]);
-  const [lower, upper] = [side('low'), side('high')];
-  const isLine = bands.every(({ low, high }) => high - low <= 1e-9 * Math.max(Math.abs(low), Math.abs(high)));
-  if (isLine) return [{ kind: 'line', ink, points: upper }];
-  return [
-    { kind: 'band', ink, upper, lower },
-    { kind: 'line', ink, points: upper },
-    { kind: 'line', ink, points: lower },
-  ];
-}
-
-function describe({ law, bands }: Curve, { unit }: Pick<Axis, 'unit'>): string {
-  const [first, last] = [bands[0]!, bands.at(-1)!];
-  const text = ({ low, high }: Band) =>
-    `${plainNumber(low)}${low === high ? '' : ` to ${plainNumber(high)}`}${unit === '' ? '' : ` ${unit}`}`;
-  return `With a ${lawName(law.law.kind)} ${text(first)} at ${volts(first.inputVoltage_V)} and ${text(last)} at ${volts(last.inputVoltage_V)}.`;
+function describe({ law, points }: Curve, { unit }: CurveHead['y']): string {
+  const text = ([input, value]: DataPoint) =>
+    `${unit === '' ? plainNumber(value) : figure(value, unit)} at ${volts(input)}`;
+  return `With a ${lawName(law.law.kind)} ${text(points[0]!)} and ${text(points.at(-1)!)}.`;
 }
 
 /** Damping index over input voltage, for outputs that span no plane. */
@@ -106,6 +101,7 @@ export function indexChart(comparison: Comparison): Chart | null {
       id: 'index',
       title: 'Greatest damping index of any unit over input voltage',
       y: { quantity: 'damping index x', unit: '' },
+      pick: greatest,
     },
     (law) => greatestIndex(comparison, law),
   );
@@ -131,12 +127,16 @@ export function indexChart(comparison: Comparison): Chart | null {
 
 /** Peak limit, output limit and line response over input voltage, as far as they are known. */
 export function currentCurves(comparison: Comparison): readonly Chart[] {
+  const isOne = isOneOutput(comparison.region);
+  const ofAny = isOne ? '' : ', least of any output';
+  const ofLargest = isOne ? '' : ', largest of any output';
   return [
     curveChart(
       comparison,
       {
         id: 'peak',
-        title: 'Peak current limit',
+        title: `Peak current limit${ofAny}`,
+        pick: least,
         y: { quantity: 'inductor current at which it trips', unit: 'A' },
       },
       ({ unit }) => limitOf(unit, comparison, peakLimit_A),
@@ -145,7 +145,8 @@ export function currentCurves(comparison: Comparison): readonly Chart[] {
       comparison,
       {
         id: 'output',
-        title: 'Output current limit',
+        title: `Output current limit${ofAny}`,
+        pick: least,
         y: { quantity: 'load current at which it trips', unit: 'A' },
       },
       ({ unit }) => limitOf(unit, comparison, outputLimit_A),
@@ -154,7 +155,8 @@ export function currentCurves(comparison: Comparison): readonly Chart[] {
       comparison,
       {
         id: 'line',
-        title: 'Line response at constant control',
+        title: `Line response at constant control${ofLargest}`,
+        pick: largest,
         y: { quantity: 'mean inductor current per volt of input', unit: 'A/V' },
       },
       ({ unit }) => unit && ((at) => lineResponse_A_per_V(unit, at)),
@@ -169,4 +171,9 @@ function limitOf(
 ): ((at: RegionPoint) => number) | null {
   if (unit === null || limit(unit, region.vertices[0]!) === null) return null;
   return (at) => limit(unit, at)!;
+}
+
+function isOneOutput({ vertices }: OperatingRegion): boolean {
+  const outputs = vertices.map(({ outputVoltage_V }) => outputVoltage_V);
+  return Math.max(...outputs) - Math.min(...outputs) < 1e-9 * Math.max(...outputs);
 }

@@ -3,7 +3,7 @@ import type { SummaryView } from '../summary.ts';
 
 /** Reasons by what they speak of, in the order of the first screen. */
 const questions: readonly (readonly [question: string, pattern: RegExp])[] = [
-  ['Limits', /^(Peak|Output) limit/],
+  ['Limits', /^(Peak|Output) limit|the limit leaves no load current/],
   ['Line response', /^Line response/],
   ['For whom', /^For /],
 ];
@@ -23,7 +23,7 @@ export function comparisonSummary({ verdict, lightLoad, notes }: Comparison) {
     answers,
   };
   const remarks = [
-    ...(lightLoad?.notes ?? []).map((text) => ({ word: 'Light load', text })),
+    ...(lightLoad?.notes ?? []).map((text) => ({ word: 'Load', text })),
     ...notes.map((text) => ({ word: 'Note', text })),
   ];
   return { summary, remarks };
