@@ -2,6 +2,7 @@ import { failure, type Outcome, success } from './base/Problem.ts';
 import { comparisonDocument } from './emit/comparisonDocument.ts';
 import type { ComparisonDocument } from './emit/comparisonSchema.ts';
 import { hasInductance, loopCorners } from './law/loopCorners.ts';
+import { undeterminedInductance } from './law/undeterminedInductance.ts';
 import type { Comparison } from './loop/Comparison.ts';
 import { compareLaws } from './loop/compareLaws.ts';
 import { comparisonNotes } from './loop/comparisonNotes.ts';
@@ -19,6 +20,8 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
   const region = buildRegion(request, powerStageOf(specification));
   if (!region.ok) return failure(region.problems);
   const corners = loopCorners(specification, region.value);
+  const undetermined = undeterminedInductance(request, corners);
+  if (undetermined.length > 0) return failure(undetermined);
   const period_s = nominalPeriod_s(specification);
   const laws = compareLaws(specification, region.value, corners, period_s);
   return success({

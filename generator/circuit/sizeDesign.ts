@@ -9,6 +9,7 @@ import {
   leastGain,
 } from '../law/leastGain.ts';
 import { hasInductance, type KnownCorners, type LoopCorners, loopCorners } from '../law/loopCorners.ts';
+import { undeterminedInductance } from '../law/undeterminedInductance.ts';
 import { demandOf } from '../ramp/demandOf.ts';
 import { buildRegion } from '../region/buildRegion.ts';
 import type { OperatingRegion } from '../region/OperatingRegion.ts';
@@ -30,6 +31,8 @@ export function sizeDesign(request: ReadSpecification): Outcome<SizedDesign> {
   if (!region.ok) return region;
   const corners = loopCorners(specification, region.value);
   if (!hasInductance(corners)) return failure([inductanceMissing(request)]);
+  const undetermined = undeterminedInductance(request, corners);
+  if (undetermined.length > 0) return failure(undetermined);
   const goal = specification.goal.dampingIndex;
   const law = laws[specification.ramp.law];
   const required = leastGain(law, region.value, corners, goal);

@@ -1,7 +1,7 @@
 import type { Interval } from '../base/Quantity.ts';
 import { type Extreme, extremesOver } from '../region/extremesOver.ts';
 import type { OperatingRegion, RegionPoint } from '../region/OperatingRegion.ts';
-import { pointsAtDuty } from '../region/pointsAtDuty.ts';
+import { pointsAtDuty, pointsAtZero } from '../region/pointsAtDuty.ts';
 import { dampingIndex } from './innerLoop.ts';
 import type { Law } from './Law.ts';
 import type { LoopCorners } from './loopCorners.ts';
@@ -19,6 +19,8 @@ export interface LeastGain {
  *   ma·L needed = (x_goal·U − up − internal − free)/λ
  *
  * greatest at a vertex where the corners are the same everywhere; the unit with the least λ needs the most.
+ * A law that clamps needs a gain above D′ wherever it must give anything at all, so that the border of the
+ * points in need counts too.
  * Infinite where the law has no ramp to give at a point that needs one (`vout` at no output voltage).
  */
 export function leastGain(law: Law, region: OperatingRegion, corners: LoopCorners, goal: number): LeastGain {
@@ -28,7 +30,11 @@ export function leastGain(law: Law, region: OperatingRegion, corners: LoopCorner
     const ramp_V = need_V(at);
     return ramp_V > needless * at.swing_V ? law.gainFor(ramp_V, at) : 0;
   };
-  const worst = most(region, corners, gain);
+  const border = law.clampOffDuty(1) === null ? [] : pointsAtZero(region, need_V);
+  const worst = [
+    most(region, corners, gain),
+    ...border.map((at) => ({ at, value: law.gainFor(0, at) })),
+  ].reduce((a, b) => (b.value > a.value ? b : a));
   return worst.value > 0
     ? { gain: worst.value, at: worst.at }
     : { gain: 0, at: most(region, corners, need_V).at };

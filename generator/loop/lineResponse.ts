@@ -22,7 +22,11 @@ export function lineResponse_A_per_V(unit: LoopUnit, point: RegionPoint): number
 function belowControl_A(unit: LoopUnit, point: RegionPoint, step_V: number): number {
   const moved = regionPoint(
     unit.region.stage,
-    { ...point, inputVoltage_V: point.inputVoltage_V + step_V },
+    {
+      inputVoltage_V: point.inputVoltage_V + step_V,
+      outputVoltage_V: point.outputVoltage_V,
+      loadCurrent_A: point.loadCurrent_A,
+    },
     point.drops,
     point.outputIndex,
   );

@@ -33,7 +33,7 @@ export interface OperatingRegion {
   readonly cuts: readonly RegionCut[];
 }
 
-/** The point with its inductor voltages, swing and duty. */
+/** The point with its inductor voltages, swing and duty; written out, for extremes take millions of them. */
 export function regionPoint(
   stage: PowerStage,
   point: OperatingPoint,
@@ -42,5 +42,15 @@ export function regionPoint(
 ): RegionPoint {
   const { up_V, down_V } = stage.inductorVoltages(point, drops);
   const swing_V = up_V + down_V;
-  return { ...point, up_V, down_V, swing_V, duty: down_V / swing_V, drops, outputIndex };
+  return {
+    inputVoltage_V: point.inputVoltage_V,
+    outputVoltage_V: point.outputVoltage_V,
+    loadCurrent_A: point.loadCurrent_A,
+    up_V,
+    down_V,
+    swing_V,
+    duty: down_V / swing_V,
+    drops,
+    outputIndex,
+  };
 }

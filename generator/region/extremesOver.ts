@@ -10,8 +10,13 @@ export interface Extremes {
   readonly max: Extreme;
 }
 
-/** Stretches into which a line is cut to bracket its extremes. */
-const stretches = 16;
+/** Shares of a line at which it is looked at to bracket its extremes: closer at its ends, where one may hide. */
+const nearEnd = [0, 1 / 512, 1 / 64];
+const shares = [
+  ...nearEnd,
+  ...Array.from({ length: 15 }, (_, index) => (index + 1) / 16),
+  ...nearEnd.map((share) => 1 - share).reverse(),
+];
 const goldenRatio = (Math.sqrt(5) - 1) / 2;
 
 /**
@@ -65,14 +70,14 @@ export function pointBetween(
   return regionPoint(stage, point, drops, a.outputIndex);
 }
 
-/** Where a function of 0 to 1 is stationary inside, as far as the stretches resolve it. */
+/** Where a function of 0 to 1 is stationary inside, as far as the shares resolve it. */
 function stationary(value: (t: number) => number): number[] {
-  const samples = Array.from({ length: stretches + 1 }, (_, index) => value(index / stretches));
+  const samples = shares.map(value);
   return samples.slice(1, -1).flatMap((sample, index) => {
     const [before, after] = [samples[index]!, samples[index + 2]!];
     const sign = sample > before && sample > after ? 1 : sample < before && sample < after ? -1 : 0;
     if (sign === 0) return [];
-    return [goldenSection((t) => sign * value(t), index / stretches, (index + 2) / stretches)];
+    return [goldenSection((t) => sign * value(t), shares[index]!, shares[index + 2]!)];
   });
 }
 

@@ -2,23 +2,37 @@ import { bisect } from '../base/bisect.ts';
 import { pointBetween } from './extremesOver.ts';
 import type { OperatingRegion, RegionPoint } from './OperatingRegion.ts';
 
+/** Points of a region at which the duty has a value: where it crosses the lines between vertices. */
+export function pointsAtDuty(region: OperatingRegion, duty: number): RegionPoint[] {
+  return pointsAtZero(region, (point) => point.duty - duty);
+}
+
 /**
- * Points of a region at which the duty has a value: where it crosses the lines between vertices.
+ * Points of a region at which a figure changes sign on the lines between vertices, on its side that is not
+ * positive.
  *
  * Lines inside the region count too: every vertex of the slice is among them.
  */
-export function pointsAtDuty(region: OperatingRegion, duty: number): RegionPoint[] {
-  const { vertices } = region;
-  return vertices.flatMap((a, index) =>
-    vertices
+export function pointsAtZero(region: OperatingRegion, figure: (point: RegionPoint) => number): RegionPoint[] {
+  const valued = region.vertices.map((at) => ({ at, isAbove: figure(at) > 0 }));
+  return valued.flatMap((a, index) =>
+    valued
       .slice(index + 1)
-      .filter((b) => a.outputIndex === b.outputIndex && a.duty > duty !== b.duty > duty)
-      .map((b) => crossing(region, a, b, duty)),
+      .filter((b) => a.at.outputIndex === b.at.outputIndex && a.isAbove !== b.isAbove)
+      .map((b) => (b.isAbove ? crossing(region, a.at, b.at, figure) : crossing(region, b.at, a.at, figure))),
   );
 }
 
-function crossing(region: OperatingRegion, a: RegionPoint, b: RegionPoint, duty: number): RegionPoint {
-  const sign = b.duty > duty ? 1 : -1;
-  const t = bisect((share) => sign * (pointBetween(region, a, b, share).duty - duty), 0, 1);
-  return pointBetween(region, a, b, t);
+function crossing(
+  region: OperatingRegion,
+  below: RegionPoint,
+  above: RegionPoint,
+  figure: (point: RegionPoint) => number,
+): RegionPoint {
+  return pointBetween(
+    region,
+    below,
+    above,
+    bisect((share) => figure(pointBetween(region, below, above, share)), 0, 1),
+  );
 }
