@@ -110,6 +110,7 @@ function rampSummary(design: SizedDesign): Result['ramp'] {
   const high = rampFigures(design, demand.track_V.high);
   const { ends } = tripSignals(design);
   return {
+    build: design.circuit.build,
     capacitance_F: sizing.capacitance_F,
     current_A: [low.chargingCurrent_A, high.chargingCurrent_A],
     capacitorSlope_V_per_s: [low.capacitorSlope_V_per_s, high.capacitorSlope_V_per_s],
