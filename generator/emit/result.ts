@@ -22,7 +22,7 @@ export function resultOf(
   return {
     schema: 'counterslope/result/1',
     specification: design.request.specification as unknown as Record<string, unknown>,
-    assumptions: [...design.request.assumptions, ...designAssumptions(design)].map(plainAssumption),
+    assumptions: allAssumptions(design).map(plainAssumption),
     corners: cornerList(design),
     region: regionFigures(design),
     law: lawFigures(design),
@@ -34,6 +34,13 @@ export function resultOf(
     simulation,
     files: [...files],
   };
+}
+
+/** Those of the specification, and those with a figure of the design, which replace what it said before. */
+function allAssumptions(design: SizedDesign): Assumption[] {
+  const own = designAssumptions(design);
+  const weighed = new Set(own.map(({ key }) => key));
+  return [...design.request.assumptions.filter(({ key }) => !weighed.has(key)), ...own];
 }
 
 function plainAssumption({ key, value, unit, reason }: Assumption) {

@@ -8,12 +8,14 @@ import { measuredCycleRatio } from '../../generator/loop/cycle/measuredCycleRati
 import { periodicOrbit } from '../../generator/loop/cycle/periodicOrbit.ts';
 import { runCycles } from '../../generator/loop/cycle/runCycles.ts';
 import { sampleCycles } from '../../generator/loop/cycle/sampleCycles.ts';
+import { boost } from '../../generator/region/converters/boost.ts';
+import { buck } from '../../generator/region/converters/buck.ts';
+import { buckBoost, cuk, sepic } from '../../generator/region/converters/buckBoost.ts';
+import { flyback } from '../../generator/region/converters/flyback.ts';
+import { forward } from '../../generator/region/converters/forward.ts';
 import type { PowerStage } from '../../generator/region/PowerStage.ts';
-import { powerStageOf } from '../../generator/region/powerStages.ts';
-import type { ConverterKind } from '../../generator/spec/Specification.ts';
 
-const kinds: ConverterKind[] = ['buck', 'boost', 'buck-boost', 'sepic', 'cuk', 'flyback', 'forward'];
-const stages = kinds.map(powerStageOf).filter((stage): stage is PowerStage => stage !== null);
+const stages: PowerStage[] = [buck, boost, buckBoost, sepic, cuk, flyback(2), forward(1.5, 'two-switch')];
 const period_s = 2e-6;
 const inductance_H = 10e-6;
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });

@@ -39,7 +39,12 @@ function observable(design: SizedDesign, from: RegionPoint): RegionPoint {
   const settled = (lagsToSettle * followerLag_s) / design.demand.period_s;
   const low = Math.max(dutyFloor, leastDuty(specification), settled);
   const high = specification.maximumDutyRatio - dutyMargin;
-  return slide(design, from, centre(design, from), ({ duty }) => duty >= low && duty <= high);
+  return slide(
+    design,
+    from,
+    centre(design, from),
+    ({ duty, outputVoltage_V }) => duty >= low && duty <= high && outputVoltage_V > 0,
+  );
 }
 
 /** The first point on the way from one to the other that is accepted; the far end where none is. */

@@ -1,6 +1,5 @@
 import { expect, test } from 'vitest';
 import { cycleRatio, dampingIndex, settlingCycles } from '../../../generator/law/innerLoop.ts';
-import { comparedLaws, lawOf } from '../../../generator/law/laws.ts';
 
 test('a damping index of one is deadbeat, below it rings, above it is sluggish', () => {
   expect(cycleRatio(1)).toBe(0);
@@ -22,11 +21,4 @@ test('settling counts whole cycles to one hundredth, and one at least', () => {
     expect(left).toBeLessThanOrEqual(0.01 * (1 + 1e-9));
     if (cycles > 1) expect(Math.abs(cycleRatio(index)) ** (cycles - 1)).toBeGreaterThan(0.01);
   }
-});
-
-test('the two compared laws are those of their names; the others are not there yet', () => {
-  expect(lawOf('fixed')).toBe(comparedLaws.fixed);
-  expect(lawOf('vin')).toBe(comparedLaws.adaptive);
-  expect(lawOf('vout')).toBeNull();
-  expect(lawOf('constant-q')).toBeNull();
 });

@@ -1,10 +1,10 @@
 import { expect, test } from 'vitest';
-import { loopCorners } from '../../../generator/law/loopCorners.ts';
 import { demandOf, rampReference } from '../../../generator/ramp/demandOf.ts';
-import { type Keys, requestOf } from '../../support/request.ts';
+import { cornersOf } from '../../support/corners.ts';
+import type { Keys } from '../../support/request.ts';
 
 async function demand(keys: Keys, gain: number) {
-  const { specification } = await requestOf({
+  const { specification, corners } = await cornersOf({
     input: '8 V to 36 V',
     inductance: '10 uH',
     senseGain: '50 mOhm',
@@ -12,8 +12,7 @@ async function demand(keys: Keys, gain: number) {
     maximumDuty: '85 %',
     ...keys,
   });
-  if (specification.inductance?.kind !== 'value') throw new Error('no inductance');
-  return demandOf(specification, loopCorners(specification, specification.inductance), gain);
+  return demandOf(specification, corners, gain);
 }
 
 test('the vin law owes k·Ri/L for each volt of input', async () => {

@@ -4,10 +4,8 @@ import { powerStageOf } from '../../../generator/region/powerStages.ts';
 import { type Keys, requestOf } from '../../support/request.ts';
 
 async function attempt(keys: Keys) {
-  return buildRegion(
-    await requestOf({ inductance: '10 uH', frequency: '500 kHz', ...keys }),
-    powerStageOf('buck')!,
-  );
+  const request = await requestOf({ inductance: '10 uH', frequency: '500 kHz', ...keys });
+  return buildRegion(request, powerStageOf(request.specification));
 }
 
 async function regionOf(keys: Keys) {
