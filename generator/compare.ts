@@ -26,7 +26,7 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
     region: region.value,
     corners,
     laws,
-    verdict: verdict(specification, region.value, laws),
+    verdict: verdict(specification, region.value, corners, laws),
     lightLoad: hasInductance(corners) ? lightLoad(specification, region.value, corners, period_s) : null,
     neededRamp: neededRamp(region.value, specification.goal.dampingIndex),
     notes: comparisonNotes(specification, region.value, corners, laws),

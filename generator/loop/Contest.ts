@@ -1,3 +1,4 @@
+import type { LoopCorners } from '../law/loopCorners.ts';
 import type { OperatingRegion } from '../region/OperatingRegion.ts';
 import type { Specification } from '../spec/Specification.ts';
 import type { ComparedLaw } from './compareLaws.ts';
@@ -9,6 +10,7 @@ export const worthwhile = 1.1;
 export interface Contest {
   readonly specification: Specification;
   readonly region: OperatingRegion;
+  readonly corners: LoopCorners;
   /** From the one that senses least to the one that senses most. */
   readonly compared: readonly ComparedLaw[];
   readonly fixed: ComparedLaw;
@@ -23,13 +25,14 @@ export interface Contest {
 export function contestOf(
   specification: Specification,
   region: OperatingRegion,
+  corners: LoopCorners,
   compared: readonly ComparedLaw[],
 ): Contest {
   const fixed = compared.find(({ law }) => law.kind === 'fixed')!;
   const best = compared.reduce((a, b) => (indexMax(b) < indexMax(a) ? b : a));
   const bound = Math.max(specification.goal.ceilingIndex, worthwhile * indexMax(best));
   const preferred = compared.find((law) => indexMax(law) <= bound)!;
-  return { specification, region, compared, fixed, best, preferred };
+  return { specification, region, corners, compared, fixed, best, preferred };
 }
 
 export function indexMax({ extremes }: ComparedLaw): number {

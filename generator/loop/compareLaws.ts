@@ -14,6 +14,8 @@ import { type LoopUnit, outputLimit_A, peakLimit_A } from './peakLimits.ts';
 export interface ComparedLaw {
   readonly law: Law;
   readonly required: LeastGain;
+  /** What limits and line response are asked of; null without an inductance. */
+  readonly unit: LoopUnit | null;
   readonly extremes: IndexExtremes;
   /** Largest damping index with every unit nominal: what the region alone costs, tolerances left out. */
   readonly nominalMax: number;
@@ -73,6 +75,7 @@ function comparedLaw(
   return {
     law,
     required,
+    unit,
     extremes,
     nominalMax: indexExtremes(law, nominalGain, region, nominal, exact).max.dampingIndex,
     cycleRatio: { low: cycleRatio(min.dampingIndex), high: cycleRatio(max.dampingIndex) },

@@ -65,6 +65,8 @@ function missingLaws({ outputVoltage_V }: OperatingRegion, compared: readonly Co
     );
 }
 
+const converterNames: Readonly<Record<string, string>> = { sepic: 'SEPIC', cuk: 'Ćuk converter' };
+
 /**
  * x = D′(1 + k) for a slope in proportion to Vin wherever m1·L is Vin: no gain holds it up as D goes to 1.
  */
@@ -73,7 +75,7 @@ function beyondTheMaximumDuty({ stage, duty }: OperatingRegion, compared: readon
   if (vin === undefined || vin.required.gain === 0 || stage.kind === 'buck' || stage.kind === 'forward')
     return [];
   return [
-    `On a ${stage.kind} the vin law gives x = D′(1 + k), which falls to nothing with D′: it is stable up to the greatest duty of this region, ${(100 * duty.high).toFixed(0)} %, and no gain makes it stable at every duty.`,
+    `On a ${converterNames[stage.kind] ?? stage.kind} the vin law gives x = D′(1 + k), which falls to nothing with D′: it is stable up to the greatest duty of this region, ${(100 * duty.high).toFixed(0)} %, and no gain makes it stable at every duty.`,
   ];
 }
 

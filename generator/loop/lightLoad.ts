@@ -57,6 +57,6 @@ function buckNotes(region: OperatingRegion, reached: boolean | null): string[] {
   const ratio = extremesOver(region, (point) => point.outputVoltage_V / point.inputVoltage_V).max.value;
   if (ratio <= discontinuousStabilityRatio) return [];
   return [
-    `There a buck without a ramp is unstable at low frequency above Vout/Vin = 2/3; ${lightLoadRampForAll.share.toPrecision(2)} of the down slope cures it, and every law here gives more.`,
+    `There a buck without a ramp is unstable at low frequency above Vout/Vin = 2/3; ${lightLoadRampForAll.share.toPrecision(2)} of the down slope cures it, less than the goal asks for in any case.`,
   ];
 }

@@ -9,6 +9,16 @@ export function limitReasons(compared: readonly ComparedLaw[]): string[] {
   return [
     ...limitReason('Peak limit', compared, ({ peakLimit_A }) => peakLimit_A),
     ...limitReason('Output limit', compared, ({ outputLimit_A }) => outputLimit_A),
+    ...nothingLeft(compared),
+  ];
+}
+
+/** A limit that the ramp alone reaches. */
+function nothingLeft(compared: readonly ComparedLaw[]): string[] {
+  const eaten = compared.filter(({ outputLimit_A }) => outputLimit_A !== null && outputLimit_A.low <= 0);
+  if (eaten.length === 0) return [];
+  return [
+    `Somewhere in the region the limit leaves no load current at all under ${eaten.map(({ law }) => law.kind).join(', ')}: ramp and ripple take all of it, and more inductance, a higher limit or a clamp that follows the ramp is needed.`,
   ];
 }
 
@@ -38,6 +48,10 @@ export function lineReasons(compared: readonly ComparedLaw[], { stage }: Operati
     line === null ? [] : [{ kind: law.kind, largest: Math.max(Math.abs(line.low), Math.abs(line.high)) }],
   );
   if (lines.length === 0) return [];
+  if (lines.every(({ largest }) => isAlike(largest, lines[0]!.largest)))
+    return [
+      `Line response of the mean inductor current at constant control, largest: ${engineering(lines[0]!.largest, 'A/V', 3)}, the same with every law.`,
+    ];
   const calmest = lines.reduce((a, b) => (b.largest < a.largest * (1 - 1e-9) ? b : a));
   const texts = lines.map(({ kind, largest }) => `${kind} ${engineering(largest, 'A/V', 3)}`);
   const published =

@@ -19,33 +19,31 @@ const steps = 5;
  * What a designer can size a ramp by before the inductor is known. Points outside the region are left out.
  */
 export function neededRamp(region: OperatingRegion, goal: number): readonly NeededRamp[] {
-  const inputs = spread(region.inputVoltage_V.low, region.inputVoltage_V.high);
-  return inputs.flatMap((inputVoltage_V) =>
-    outputsAt(region, inputVoltage_V).map((at) => ({
-      inputVoltage_V,
-      outputVoltage_V: at.outputVoltage_V,
-      duty: at.duty,
-      rampOverUpSlope: Math.max(0, goal / (1 - at.duty) - 1),
-    })),
+  const { low, high } = region.inputVoltage_V;
+  const outputs = region.vertices.map((vertex) => vertex.outputVoltage_V);
+  const rows = spread(Math.max(0, Math.min(...outputs)), Math.max(...outputs), steps);
+  return spread(low, high, steps).flatMap((input) =>
+    rows.flatMap((output) => neededRampAt(region, goal, input, output) ?? []),
   );
 }
 
-function outputsAt(region: OperatingRegion, inputVoltage_V: number): RegionPoint[] {
-  const outputs = region.vertices.map((vertex) => vertex.outputVoltage_V);
+/** The needed ramp at one input and output, of the unit with the least losses; null outside the region. */
+export function neededRampAt(
+  region: OperatingRegion,
+  goal: number,
+  inputVoltage_V: number,
+  outputVoltage_V: number,
+): NeededRamp | null {
   const first = region.vertices[0]!;
-  return spread(Math.max(0, Math.min(...outputs)), Math.max(...outputs))
-    .map((outputVoltage_V) =>
-      regionPoint(
-        region.stage,
-        { ...first, inputVoltage_V, outputVoltage_V },
-        first.drops,
-        first.outputIndex,
-      ),
-    )
-    .filter(({ duty }) => duty >= region.duty.low - 1e-12 && duty <= region.duty.high + 1e-12 && duty < 1);
+  const point = { ...first, inputVoltage_V, outputVoltage_V };
+  const at: RegionPoint = regionPoint(region.stage, point, first.drops, first.outputIndex);
+  const { duty } = at;
+  if (duty < region.duty.low - 1e-12 || duty > region.duty.high + 1e-12 || duty >= 1) return null;
+  return { inputVoltage_V, outputVoltage_V, duty, rampOverUpSlope: Math.max(0, goal / (1 - duty) - 1) };
 }
 
-function spread(low: number, high: number): number[] {
+/** Values from low to high, ends included; one where they are the same. */
+export function spread(low: number, high: number, count: number): number[] {
   if (high - low <= 1e-9 * high) return [low];
-  return Array.from({ length: steps }, (_, index) => low + ((high - low) * index) / (steps - 1));
+  return Array.from({ length: count }, (_, index) => low + ((high - low) * index) / (count - 1));
 }

@@ -1,7 +1,7 @@
 import { outerInterval, type Span } from '../base/Quantity.ts';
 import { type Contest, indexMax, worthwhile } from './Contest.ts';
 import type { ComparedLaw } from './compareLaws.ts';
-import { cycles, index, placeOfMax, ratioSpan, senses, volts } from './verdictWords.ts';
+import { cycles, index, indexSpan, placeOfMax, ratioSpan, senses, volts } from './verdictWords.ts';
 
 /**
  * Largest damping index up to which a law counts as close to deadbeat: below it the double pole at half
@@ -9,16 +9,26 @@ import { cycles, index, placeOfMax, ratioSpan, senses, volts } from './verdictWo
  */
 const unsplitIndex = 0.5 + 2 / Math.PI;
 
-export function noRampReasons({ specification: { goal }, fixed: { extremes } }: Contest): string[] {
-  const [least, most] = [extremes.min.dampingIndex, extremes.max.dampingIndex];
-  const reasons = [
-    `No ramp needs to be added: without any, the damping index is at least ${index(least)} over the whole region, the goal being ${index(goal.dampingIndex)}.`,
+export function noRampReasons({ specification, fixed }: Contest): string[] {
+  const { goal } = specification;
+  const [least, most] = [fixed.extremes.min.dampingIndex, indexMax(fixed)];
+  const present = alreadyThere(specification);
+  const counted = present === '' ? '' : `, ${present} counted`;
+  if (most <= goal.ceilingIndex)
+    return [
+      `No ramp needs to be added: without any${counted}, ${indexSpan(fixed)} over the whole region, the goal being ${index(goal.dampingIndex)}.`,
+    ];
+  return [
+    `No ramp needs to be added, and what compensates already, ${present}, is too much: x runs from ${index(least)} to ${index(most)}, the ceiling being ${index(goal.ceilingIndex)}.`,
+    'No added ramp can take that back. What would help: less inductance (window tells which fit), or less of what compensates already.',
   ];
-  if (most > goal.ceilingIndex)
-    reasons.push(
-      `What compensates already, the controller's own ramp or the magnetizing current, is too much: x up to ${index(most)}, the ceiling being ${index(goal.ceilingIndex)}. No added ramp can take that back.`,
-    );
-  return reasons;
+}
+
+/** What compensates without a ramp of ours. */
+export function alreadyThere({ controller, magnetizingInductance_H }: Contest['specification']): string {
+  const own = (controller?.internalRamp_V_per_s?.high ?? 0) > 0 ? ["the controller's own ramp"] : [];
+  const free = magnetizingInductance_H === null ? [] : ['the magnetizing current'];
+  return [...own, ...free].join(' and ');
 }
 
 export function fixedReasons(contest: Contest): string[] {
@@ -27,17 +37,17 @@ export function fixedReasons(contest: Contest): string[] {
   const vin = compared.find(({ law }) => law.kind === 'vin');
   if (vin && indexMax(vin) > worthwhile * indexMax(fixed))
     reasons.push(
-      `A ramp that follows the input would over-compensate more: vin takes x up to ${index(indexMax(vin))} ${placeOfMax(vin)}.`,
+      `A ramp that follows the input is no better: vin takes x up to ${index(indexMax(vin))} ${placeOfMax(vin)}.`,
     );
   if (isTighter(best, fixed))
     reasons.push(
-      `Tighter than it is ${best.law.kind}, x up to ${index(indexMax(best))}, but it has to sense ${senses[best.law.kind]}.`,
+      `Tighter would be ${best.law.kind}, x up to ${index(indexMax(best))}, but it has to sense ${senses[best.law.kind]}.`,
     );
   return [...reasons, fixedAdvice(contest)];
 }
 
 function fixedVerdict({ fixed, best, specification: { goal } }: Contest): string {
-  const span = `x between ${index(fixed.extremes.min.dampingIndex)} and ${index(indexMax(fixed))}, cycle ratio ${ratioSpan(fixed)}`;
+  const span = `${indexSpan(fixed)}, cycle ratio ${ratioSpan(fixed)}`;
   if (indexMax(fixed) > goal.ceilingIndex)
     return `Among them a fixed ramp does as well for damping as any: ${span}; adapting the ramp buys nothing here.`;
   if (indexMax(fixed) <= Math.max(unsplitIndex, worthwhile * indexMax(best)))
@@ -72,10 +82,14 @@ export function adaptiveReasons(contest: Contest): string[] {
 
 function adaptiveVerdict({ preferred, fixed, specification: { goal } }: Contest): string {
   const { kind } = preferred.law;
-  const own = `${kind} keeps x between ${index(preferred.extremes.min.dampingIndex)} and ${index(indexMax(preferred))} (cycle ratio ${ratioSpan(preferred)}, ${cycles(preferred)} to settle) by sensing ${senses[kind]}`;
-  const other = `a fixed ramp, sized at its worst point, reaches x = ${index(indexMax(fixed))} ${placeOfMax(fixed)} (cycle ratio up to ${fixed.cycleRatio.high.toFixed(3)}, ${cycles(fixed)} to settle)`;
-  const lead = indexMax(preferred) > goal.ceilingIndex ? 'Among them an adaptive' : 'An adaptive';
-  return `${lead} ramp is worth it: ${own}; ${other}.`;
+  const ceiling = goal.ceilingIndex;
+  const own = `${kind} keeps ${indexSpan(preferred)} (cycle ratio ${ratioSpan(preferred)}, ${cycles(preferred)} to settle) by sensing ${senses[kind]}`;
+  const reaches = `x = ${index(indexMax(fixed))} ${placeOfMax(fixed)} (cycle ratio up to ${fixed.cycleRatio.high.toFixed(3)}, ${cycles(fixed)} to settle)`;
+  if (indexMax(preferred) > ceiling)
+    return `Among them an adaptive ramp does less harm: ${own}; a fixed ramp, sized at its worst point, reaches ${reaches}.`;
+  if (indexMax(fixed) < worthwhile * ceiling)
+    return `A fixed ramp just misses the ceiling of ${index(ceiling)}: it reaches ${reaches}. An adaptive one keeps below: ${own}; a slightly higher ceiling would spare it.`;
+  return `An adaptive ramp is worth it: ${own}; a fixed ramp, sized at its worst point, over-compensates to ${reaches}.`;
 }
 
 /** What following the input alone, the easiest to sense, would come to where it is not the choice. */
@@ -86,9 +100,10 @@ function inputAlone({ preferred, fixed, compared, specification: { goal } }: Con
   if (indexMax(vin) * worthwhile >= indexMax(fixed))
     return [`Following the input alone buys nothing here: ${most}.`];
   const ceiling =
-    indexMax(vin) > goal.ceilingIndex ? `, above the ceiling of ${index(goal.ceilingIndex)}` : '';
+    indexMax(vin) > goal.ceilingIndex ? `, still above the ceiling of ${index(goal.ceilingIndex)}` : '';
+  const degree = 2 * indexMax(vin) < indexMax(fixed) ? 'far better' : 'better';
   return [
-    `Where only the input can be sensed, vin is still far better than a fixed ramp: ${most}${ceiling}, ${cycles(vin)} to settle against ${fixed.settlingCyclesMax}.`,
+    `Where only the input can be sensed, vin is ${degree} than a fixed ramp: ${most}${ceiling}, ${cycles(vin)} to settle against ${fixed.settlingCyclesMax}.`,
   ];
 }
 

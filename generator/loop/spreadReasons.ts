@@ -1,9 +1,8 @@
 import { bisect } from '../base/bisect.ts';
-import { outerInterval } from '../base/Quantity.ts';
 import { indexExtremes, leastGain } from '../law/leastGain.ts';
-import { loopCorners, nominalCorners } from '../law/loopCorners.ts';
+import { hasInductance, nominalCorners } from '../law/loopCorners.ts';
 import { type Contest, indexMax } from './Contest.ts';
-import type { ComparedLaw } from './compareLaws.ts';
+import { alreadyThere } from './preferenceReasons.ts';
 import { cycles, henries, index, placeOfMax } from './verdictWords.ts';
 
 /** Where even the best law is above the ceiling: by how much, why, and what would help. */
@@ -22,39 +21,55 @@ function excess(ratio: number): string {
 }
 
 function cause(contest: Contest): string[] {
-  const { best, specification } = contest;
-  const { goal } = specification;
+  const { best, specification, corners } = contest;
+  const { goal, inductance } = specification;
   if (goal.dampingIndex >= goal.ceilingIndex)
     return [
       `The goal of ${index(goal.dampingIndex)} is itself not below the ceiling. What would help: a lower goal, or a higher ceiling.`,
     ];
-  if (best.nominalMax > goal.ceilingIndex)
+  if (inductance?.kind === 'ripple' && hasInductance(corners)) {
+    const { low, high } = corners.inductance_H;
     return [
-      `What compensates already is the cause, the controller's own ramp or the magnetizing current: with every unit nominal x would still reach ${index(best.nominalMax)}. What would help: less of it, or less inductance.`,
+      `The inductance that the ripple asks for, ${henries(low)} to ${henries(high)} over the region, is the cause, one ramp serving all of it. What would help: a ramp set for the inductor at hand, by one resistor, or a narrower range of inputs and outputs.`,
     ];
+  }
+  if (best.nominalMax > goal.ceilingIndex) return [nominalCause(contest)];
   return [
     `The spread of inductance and sense gain is the cause: with both at one value x would stay below ${index(best.nominalMax)}.`,
-    ...remedies(contest),
+    ...(inductance?.kind === 'value' ? remedies(contest, inductance) : []),
   ];
 }
 
+/** Too much with every unit nominal: by what is there without us, or because the region asks for it. */
+function nominalCause({ best, specification }: Contest): string {
+  const present = alreadyThere(specification);
+  const still = `with every unit nominal x would still reach ${index(best.nominalMax)}`;
+  return present === ''
+    ? `The region itself is the cause: ${still}. What would help: a higher ceiling, a lower goal, or a narrower range of inputs and outputs.`
+    : `What compensates already, ${present}, is the cause: ${still}. What would help: less of it, or less inductance.`;
+}
+
+type ValueInductance = Extract<Contest['specification']['inductance'], { kind: 'value' }>;
+
 /** What would help, with the spread that the ceiling allows. */
-function remedies(contest: Contest): string[] {
-  const { specification, best } = contest;
-  const { inductance, senseGain_V_per_A: gain } = specification;
-  if (inductance?.kind !== 'value')
+function remedies(contest: Contest, { value_H, atPeakLimit_H }: ValueInductance): string[] {
+  const { senseGain_V_per_A: gain } = contest.specification;
+  const { from, to } = value_H;
+  const least = Math.min(from.low, atPeakLimit_H?.low ?? from.low);
+  const allowed = widestSpread(contest) / (gain.high / gain.low);
+  const measured = `Below the ceiling the largest inductance may be ${allowed.toPrecision(3)} times the least; ${henries(least)} to ${henries(to.high)} is ${(to.high / least).toPrecision(3)} times`;
+  // What is left of it for the choice of inductor, its own tolerance and saturation taken off.
+  const perSetting = allowed / ((to.high / to.nominal) * (from.nominal / least));
+  if (from.nominal < to.nominal && perSetting > 1.05) {
+    const settings = Math.ceil(Math.log(to.nominal / from.nominal) / Math.log(perSetting) - 1e-9);
     return [
-      'What would help: a narrower ripple or frequency range, a tighter sense gain, or a higher ceiling.',
+      `What would help: a ramp set for the inductor at hand, by one resistor. ${measured}, so that ${settings} settings would cover it. A narrower range would help as well.`,
     ];
-  const { low, high } = outerInterval(inductance.value_H);
-  const least = Math.min(low, inductance.atPeakLimit_H?.low ?? low);
-  const allowed = widestSpread(contest, best) / (gain.high / gain.low);
-  if (!(allowed > 1.05))
-    return ['What would help: a tighter sense gain, a narrower inductance range, or a higher ceiling.'];
-  const ranges = Math.ceil(Math.log(high / least) / Math.log(allowed) - 1e-9);
-  return [
-    `What would help: a ramp set for the inductor at hand, by one resistor. Below the ceiling the largest inductance may be ${allowed.toPrecision(3)} times the least; ${henries(least)} to ${henries(high)} is ${(high / least).toPrecision(3)} times, so ${ranges} settings would cover it. An inductance tied to the ripple, or a narrower range, would help as well.`,
-  ];
+  }
+  const inductor =
+    to.high > least ? 'an inductor of less tolerance, or one that saturates less' : 'a tighter sense gain';
+  const either = gain.high > gain.low && to.high > least ? `${inductor}, or a tighter sense gain` : inductor;
+  return [`What would help: ${either}, or a higher ceiling. ${allowed > 1 ? `${measured}.` : ''}`.trimEnd()];
 }
 
 /**
@@ -62,8 +77,8 @@ function remedies(contest: Contest): string[] {
  *
  * x = D′ + λ·(ramp)/U rises with λ at every point.
  */
-function widestSpread({ specification, region }: Contest, { law }: ComparedLaw): number {
-  const nominal = nominalCorners(specification, loopCorners(specification, region));
+function widestSpread({ specification, region, corners, best: { law } }: Contest): number {
+  const nominal = nominalCorners(specification, corners);
   const { gain } = leastGain(law, region, nominal, specification.goal.dampingIndex);
   const excess = (high: number) =>
     indexExtremes(law, gain, region, nominal, { low: 1, high }).max.dampingIndex -

@@ -1,3 +1,4 @@
+import type { LoopCorners } from '../law/loopCorners.ts';
 import type { OperatingRegion } from '../region/OperatingRegion.ts';
 import type { LawKind, Specification } from '../spec/Specification.ts';
 import { contestOf } from './Contest.ts';
@@ -17,9 +18,10 @@ export interface Verdict {
 export function verdict(
   specification: Specification,
   region: OperatingRegion,
+  corners: LoopCorners,
   compared: readonly ComparedLaw[],
 ): Verdict {
-  const contest = contestOf(specification, region, compared);
+  const contest = contestOf(specification, region, corners, compared);
   const { preferred, fixed } = contest;
   const others = [...limitReasons(compared), ...lineReasons(compared, region)];
   if (compared.every(({ required }) => required.gain === 0))

@@ -34,9 +34,16 @@ export function cycles({ settlingCyclesMax: count }: ComparedLaw): string {
   return count === 1 ? '1 cycle' : `${count} cycles`;
 }
 
+/** `x between 0.8183 and 0.9697` */
+export function indexSpan({ extremes: { min, max } }: ComparedLaw): string {
+  const [least, most] = [index(min.dampingIndex), index(max.dampingIndex)];
+  return least === most ? `x at ${least}` : `x between ${least} and ${most}`;
+}
+
 /** `-0.222 to -0.031` */
 export function ratioSpan({ cycleRatio: { low, high } }: ComparedLaw): string {
-  return `${low.toFixed(3)} to ${high.toFixed(3)}`;
+  const [from, to] = [low.toFixed(3), high.toFixed(3)];
+  return from === to ? from : `${from} to ${to}`;
 }
 
 /** Closer than this, relative, two figures are one. */

@@ -19,7 +19,7 @@ export function inkOf(kind: LawKind): 'adaptive' | 'fixed' {
 }
 
 /** `k = 0.752` */
-export function gainText({ law }: SizedLaw, gain: number): string {
+export function gainText({ law }: Pick<SizedLaw, 'law'>, gain: number): string {
   return `${law.gainSymbol}\u00a0=\u00a0${figure(gain, law.gainUnit)}`;
 }
 

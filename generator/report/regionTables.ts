@@ -6,14 +6,13 @@ import { digits, figure, interval, percent, plainNumber, typeset, volts } from '
 import { type TableView, tableView } from './table.ts';
 
 /** What was asked for, normalised. */
-export function requirementTable({ request }: SizedDesign): TableView {
-  const { specification: spec } = request;
+export function requirementTable({ specification: spec }: SizedDesign['request']): TableView {
   const inductance = spec.inductance?.kind === 'value' ? spec.inductance : null;
   const rows: (readonly [string, string | null])[] = [
     ['converter', spec.converter],
     ['input voltage', writeSpan(spec.input_V, 'voltage')],
     ['output voltage', spec.output_V?.map((span) => writeSpan(span, 'voltage')).join('; ') ?? 'not known'],
-    ['inductance', inductance && writeSpan(inductance.value_H, 'inductance')],
+    ['inductance', inductanceText(spec.inductance)],
     [
       'inductance at the peak limit',
       inductance?.atPeakLimit_H ? writeQuantity(inductance.atPeakLimit_H, 'inductance') : null,
@@ -41,6 +40,13 @@ export function requirementTable({ request }: SizedDesign): TableView {
   );
 }
 
+function inductanceText(inductance: SizedDesign['request']['specification']['inductance']): string {
+  if (inductance === null) return 'not known';
+  if (inductance.kind === 'value') return writeSpan(inductance.value_H, 'inductance');
+  const { rippleRatio, of_A } = inductance;
+  return `for a ripple of ${writeSpan(rippleRatio, 'ratio')} of ${writeQuantity(of_A, 'current')}`;
+}
+
 function lossesText(losses: SizedDesign['request']['specification']['losses']): string {
   if (losses === null) return 'not given';
   const parts = [
@@ -52,7 +58,10 @@ function lossesText(losses: SizedDesign['request']['specification']['losses']): 
 }
 
 /** The region that is left, in sentences. */
-export function regionSentences({ region, request }: SizedDesign): readonly string[] {
+export function regionSentences({
+  region,
+  request,
+}: Pick<SizedDesign, 'region' | 'request'>): readonly string[] {
   const { inputVoltage_V, outputVoltage_V, duty } = region;
   const input = interval(volts(inputVoltage_V.low), volts(inputVoltage_V.high));
   const duties = interval(percent(duty.low, 3), percent(duty.high, 3));
@@ -96,7 +105,7 @@ export function cornerTable({ corners }: Result): TableView {
 }
 
 /** Assumptions and waivers, each with a field to sign. */
-export function assumptionTable({ assumptions }: Result): TableView {
+export function assumptionTable({ assumptions }: Pick<Result, 'assumptions'>): TableView {
   return tableView(
     'Assumptions, to be accepted or waived one by one',
     [

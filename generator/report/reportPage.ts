@@ -6,11 +6,9 @@ import { contentSecurityPolicy } from '../emit/text/contentSecurityPolicy.ts';
 import type { Waveforms } from '../spice/Deck.ts';
 import { benchPlan } from './benchPlan.ts';
 import { cautions } from './cautions.ts';
-import type { Chart } from './chart/Chart.ts';
-import { type Format, formats } from './chart/formats.ts';
+import { figureViews } from './chart/figureViews.ts';
+import { formats } from './chart/formats.ts';
 import { type BarChart, layOutBars } from './chart/layOutBars.ts';
-import { layOutChart } from './chart/layOutChart.ts';
-import { legendView } from './chart/legendView.ts';
 import { ruleTable, simulationTable } from './checkTables.ts';
 import { figureTable, partsTable, portTable, rampTable } from './circuitTables.ts';
 import { currentCharts, worstDeck } from './currentCharts.ts';
@@ -42,7 +40,7 @@ export async function reportPage({ design, result, waveforms }: ReportInput): Pr
     policy: await contentSecurityPolicy({ scripts: [], styles: [styleTemplate({})] }),
     title: specification.title || 'Slope-compensation ramp generator',
     summary: summaryOf(design, result),
-    requirements: requirementTable(design),
+    requirements: requirementTable(design.request),
     region: regionSentences(design),
     corners: cornerTable(result),
     damping: figureViews(dampingChart(design, result), formats.wide),
@@ -66,17 +64,8 @@ export async function reportPage({ design, result, waveforms }: ReportInput): Pr
     bench: benchPlan(design),
     cautions: cautions(design),
     reproduction: await reproduction(design, result),
-    titleBlock: titleBlock(design),
+    titleBlock: titleBlock(design.request.specification, 'design sheet'),
   });
-}
-
-/** A plot at its place, drawn once for desks and paper and once for narrow screens. */
-function figureViews(chart: Chart, format: Format) {
-  return {
-    title: chart.title,
-    formats: [layOutChart(chart, format), layOutChart(chart, formats.narrow)],
-    legend: legendView(chart),
-  };
 }
 
 function barsView(chart: BarChart) {

@@ -20,6 +20,10 @@ const texts: Readonly<Record<string, (spec: Specification) => Text>> = {
     inductance?.kind === 'value' ? writeSpan(inductance.value_H, 'inductance') : null,
   'inductance.atPeakLimit': ({ inductance }) =>
     inductance?.kind === 'value' ? quantity(inductance.atPeakLimit_H, 'inductance') : null,
+  'inductance.ripple': ({ inductance }) =>
+    inductance?.kind === 'ripple' ? writeSpan(inductance.rippleRatio, 'ratio') : null,
+  'inductance.of': ({ inductance }) =>
+    inductance?.kind === 'ripple' ? quantity(inductance.of_A, 'current') : null,
   frequency: ({ frequency_Hz }) => writeSpan(frequency_Hz, 'frequency'),
   maximumDuty: ({ maximumDutyRatio }) => maximumDutyRatio,
   load: ({ load_A }) => load_A && writeSpan(load_A, 'current'),
@@ -29,6 +33,11 @@ const texts: Readonly<Record<string, (spec: Specification) => Text>> = {
   'losses.rectifier': ({ losses }) => quantity(losses?.rectifier_ohm, 'resistance'),
   minimumOnTime: ({ minimumOnTime_s }) => quantity(minimumOnTime_s, 'time'),
   senseGain: ({ senseGain_V_per_A }) => quantity(senseGain_V_per_A, 'gain'),
+  turnsRatio: ({ turnsRatio }) => quantity(turnsRatio, 'number'),
+  magnetizingInductance: ({ magnetizingInductance_H: value }) => value && writeSpan(value, 'inductance'),
+  stage: ({ stage }) => stage,
+  secondInductance: ({ secondInductance_H: value }) => value && writeSpan(value, 'inductance'),
+  couplingCapacitor: ({ couplingCapacitor_F: value }) => value && writeSpan(value, 'capacitance'),
   'outputCapacitor.capacitance': ({ outputCapacitor }) =>
     outputCapacitor && writeSpan(outputCapacitor.capacitance_F, 'capacitance'),
   'outputCapacitor.seriesResistance': ({ outputCapacitor }) =>

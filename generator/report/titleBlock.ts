@@ -1,4 +1,4 @@
-import type { SizedDesign } from '../circuit/SizedDesign.ts';
+import type { Specification } from '../spec/Specification.ts';
 
 export interface Field {
   readonly name: string;
@@ -8,14 +8,13 @@ export interface Field {
 }
 
 /** The data fields of a title block (ISO 7200), from the specification's sheet. */
-export function titleBlock({ request }: SizedDesign): readonly Field[] {
-  const { sheet, title, date } = request.specification;
+export function titleBlock({ sheet, title, date }: Specification, type: string): readonly Field[] {
   return [
     field('Legal owner', sheet.owner, 'owner'),
     field('Title', title, 'title'),
     field('Identification number', sheet.number, 'number'),
     field('Revision', sheet.revision, 'revision'),
-    field('Document type', 'Slope compensation, design sheet', 'type'),
+    field('Document type', `Slope compensation, ${type}`, 'type'),
     field('Creator', sheet.author, 'author'),
     field('Approval person', sheet.approver, 'approver'),
     field('Date of issue', sheet.issued || date, 'issued'),

@@ -14,7 +14,17 @@ export interface Axis {
 }
 
 /** Colour and line style; each is the same through the whole report. */
-export type Ink = 'adaptive' | 'fixed' | 'predicted' | 'simulated' | 'goal' | 'ceiling' | 'edge' | 'plain';
+export type Ink =
+  | 'adaptive'
+  | 'fixed'
+  | 'vout'
+  | 'constant-q'
+  | 'predicted'
+  | 'simulated'
+  | 'goal'
+  | 'ceiling'
+  | 'edge'
+  | 'plain';
 
 /** What is drawn, the first at the bottom. */
 export type Mark =
@@ -34,6 +44,12 @@ export type Mark =
   | { readonly kind: 'rings'; readonly ink: Ink; readonly points: readonly DataPoint[] }
   /** Crosses: predicted. */
   | { readonly kind: 'crosses'; readonly ink: Ink; readonly points: readonly DataPoint[] }
+  /** The whole plot hatched, to be covered where there is something. */
+  | { readonly kind: 'outside'; readonly label: string; readonly at: DataPoint | null }
+  /** Filled with a step of the scale from paper to ink. */
+  | { readonly kind: 'tint'; readonly step: number; readonly outline: readonly DataPoint[] }
+  /** Line of one value, labelled on itself. */
+  | { readonly kind: 'contour'; readonly label: string; readonly points: readonly DataPoint[] }
   | {
       readonly kind: 'note';
       readonly at: DataPoint;
@@ -51,8 +67,10 @@ export interface EdgeLabel {
 
 /** How a kind of mark looks, and what it stands for. */
 export interface LegendEntry {
-  readonly mark: 'line' | 'rings' | 'crosses';
+  readonly mark: 'line' | 'rings' | 'crosses' | 'tint';
   readonly ink: Ink;
+  /** Of the scale from paper to ink, for a tint. */
+  readonly step?: number;
   readonly text: string;
 }
 

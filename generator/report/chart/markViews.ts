@@ -31,6 +31,17 @@ export function markShapes(mark: Mark, area: Area): ShapeView[] {
       return symbols(mark.points, area, ring, `ring ${mark.ink}`);
     case 'crosses':
       return symbols(mark.points, area, cross, `cross ${mark.ink}`);
+    case 'outside':
+      return [
+        {
+          d: hatching({ left: area.left, right: area.right, top: area.top, bottom: area.bottom }),
+          className: 'hatch',
+        },
+      ];
+    case 'tint':
+      return [{ d: `${path(mark.outline, area)}Z`, className: `tint t${mark.step}` }];
+    case 'contour':
+      return [{ d: path(mark.points, area), className: 'contour' }];
     case 'note':
       return [];
   }
@@ -42,11 +53,29 @@ export function markTexts(mark: Mark, area: Area): TextView[] {
     if (area.bottom - y < lineHeight) return [];
     return [textView(area.left + 8, (y + area.bottom) / 2 + 4, mark.label, 'start', 'halo')];
   }
+  if (mark.kind === 'contour') return contourText(mark, area);
+  if (mark.kind === 'outside') {
+    if (mark.at === null) return [];
+    const [x, y] = place(area, mark.at);
+    return [textView(x, y + 4, mark.label, 'middle', 'halo')];
+  }
   if (mark.kind !== 'note') return [];
   const [x, y] = place(area, mark.at);
   const share = (x - area.left) / (area.right - area.left);
   const anchor = share < 0.3 ? 'start' : share > 0.7 ? 'end' : 'middle';
   return [textView(x, y + (mark.side === 'above' ? -10 : 19), mark.text, anchor, `halo ${mark.ink}`)];
+}
+
+/** On the line itself, where there is room for it beside the plot's edges. */
+function contourText({ points, label }: Extract<Mark, { kind: 'contour' }>, area: Area): TextView[] {
+  const room = 18;
+  const inside = points
+    .map((point) => place(area, point))
+    .filter(
+      ([x, y]) => x > area.left + room && x < area.right - room && y > area.top + 12 && y < area.bottom - 8,
+    );
+  const at = inside[Math.floor(0.62 * inside.length)];
+  return at === undefined ? [] : [textView(at[0], at[1] + 4, label, 'middle', 'halo')];
 }
 
 function path(points: readonly DataPoint[], area: Area): string {
