@@ -22,7 +22,7 @@ export const windowCommand: Command = {
   examples: [
     {
       task: "Which inductors suit a chip's own ramp",
-      line: 'counterslope window --vin "6 V to 36 V" --vout "[3.3 V, 5 V]" --fs 500kHz --set "controller.internalRamp=45 mV/us ± 20 %"',
+      line: 'counterslope window chip.yaml --set "controller.internalRamp=45 mV/us"',
     },
     { task: 'Keep the table with a design', line: 'counterslope window rail.yaml --out ramp' },
   ],

@@ -13,6 +13,8 @@ describe('help and version', () => {
       ['help', 'design'],
       ['design', '--help'],
       ['rules', '-h'],
+      ['compare', '-h'],
+      ['window', '-h'],
     ]) {
       const { code, stdout, stderr } = await run(argv);
       expect([code, stderr]).toEqual([0, '']);
