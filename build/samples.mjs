@@ -13,12 +13,13 @@ export function sampleNames() {
   return readdirSync(samplesFolder).filter((name) => existsSync(join(samplesFolder, name, 'spec.yaml')));
 }
 
-/** Designs a sample into a folder. The specification is named from the sample's own folder. */
+/** Designs a sample into a folder and compares the laws there; the specification is named from its own folder. */
 export function designSample(name, directory) {
-  execFileSync(process.execPath, [command, 'design', 'spec.yaml', '--out', directory, '--force', '--quiet'], {
-    cwd: join(samplesFolder, name),
-    stdio: ['ignore', 'ignore', 'inherit'],
-  });
+  for (const task of ['design', 'compare'])
+    execFileSync(process.execPath, [command, task, 'spec.yaml', '--out', directory, '--force', '--quiet'], {
+      cwd: join(samplesFolder, name),
+      stdio: ['ignore', 'ignore', 'inherit'],
+    });
 }
 
 /** Files that differ between two folders, or stand in one only. */
