@@ -31,7 +31,14 @@ export function checkPoints(
   const over = reach(observable(design, law.extremes.max.at));
   const halfWay = (point: RegionPoint) =>
     reach(observable(design, mix(design, point, centre(design, point), 0.5)));
-  return distinct([worst, over, halfWay(worst), halfWay(over), mix(design, worst, over, 0.5)]).slice(0, 3);
+  const far = reach(observable(design, farthest(design, worst)));
+  return distinct([worst, over, halfWay(worst), far, halfWay(over), halfWay(far)]).slice(0, 3);
+}
+
+/** The vertex whose input voltage is farthest, as a ratio: where the most over-compensated is the worst itself. */
+function farthest({ region }: SizedDesign, from: RegionPoint): RegionPoint {
+  const distance = (point: RegionPoint) => Math.abs(Math.log(point.inputVoltage_V / from.inputVoltage_V));
+  return region.vertices.reduce((a, b) => (distance(b) > distance(a) ? b : a));
 }
 
 function observable(design: SizedDesign, from: RegionPoint): RegionPoint {
