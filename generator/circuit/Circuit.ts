@@ -1,4 +1,4 @@
-import type { SeriesName } from '../spec/Specification.ts';
+import type { BuildKind, SeriesName } from '../spec/Specification.ts';
 
 export type ComponentKind = 'resistor' | 'capacitor' | 'npn' | 'pnp' | 'nmos' | 'opamp';
 
@@ -29,6 +29,7 @@ export interface Component {
 
 /** A ramp generator as one typed object. */
 export interface Circuit {
+  readonly build: Exclude<BuildKind, 'auto'>;
   /** Subcircuit name. */
   readonly name: string;
   readonly ports: readonly Port[];

@@ -22,7 +22,7 @@ export function resultOf(
   return {
     schema: 'counterslope/result/1',
     specification: design.request.specification as unknown as Record<string, unknown>,
-    assumptions: [...design.request.assumptions, ...designAssumptions(design)].map(plainAssumption),
+    assumptions: allAssumptions(design).map(plainAssumption),
     corners: cornerList(design),
     region: regionFigures(design),
     law: lawFigures(design),
@@ -34,6 +34,13 @@ export function resultOf(
     simulation,
     files: [...files],
   };
+}
+
+/** Those of the specification, and those with a figure of the design, which replace what it said before. */
+function allAssumptions(design: SizedDesign): Assumption[] {
+  const own = designAssumptions(design);
+  const weighed = new Set(own.map(({ key }) => key));
+  return [...design.request.assumptions.filter(({ key }) => !weighed.has(key)), ...own];
 }
 
 function plainAssumption({ key, value, unit, reason }: Assumption) {
@@ -110,6 +117,7 @@ function rampSummary(design: SizedDesign): Result['ramp'] {
   const high = rampFigures(design, demand.track_V.high);
   const { ends } = tripSignals(design);
   return {
+    build: design.circuit.build,
     capacitance_F: sizing.capacitance_F,
     current_A: [low.chargingCurrent_A, high.chargingCurrent_A],
     capacitorSlope_V_per_s: [low.capacitorSlope_V_per_s, high.capacitorSlope_V_per_s],

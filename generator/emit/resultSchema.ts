@@ -106,6 +106,8 @@ export const resultSchema = z.strictObject({
     settlingCyclesMax: finite.nullable(),
   }),
   ramp: z.strictObject({
+    /** The build that was chosen, where the specification left it open. */
+    build: z.string(),
     capacitance_F: finite,
     current_A: interval,
     capacitorSlope_V_per_s: interval,

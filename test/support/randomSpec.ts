@@ -43,7 +43,7 @@ const input = fc
 /** As shares of the highest input: nothing known, a value, a range, a list. */
 const outputShares = fc.oneof(
   fc.constant(null),
-  between(0.02, 1.02).map((share) => [[share, share]]),
+  between(0.02, 0.98).map((share) => [[share, share]]),
   fc.tuple(between(0.01, 0.6), between(1.05, 8)).map(([low, ratio]) => [[low, Math.min(1.02, low * ratio)]]),
   fc.array(
     between(0.02, 0.9).map((share) => [share, share]),
@@ -55,7 +55,7 @@ const optional = <T>(value: fc.Arbitrary<T>, weight = 1) =>
   fc.oneof({ weight, arbitrary: fc.constant(undefined) }, { weight: 1, arbitrary: value });
 
 const rest = fc.record({
-  'inductance.value': toleranced(ranged(logarithmic(1e-7, 1e-3), 10, 'uH', 1e-6)),
+  'inductance.value': toleranced(ranged(logarithmic(5e-7, 1e-3), 10, 'uH', 1e-6)),
   frequency: toleranced(ranged(logarithmic(2e4, 3e6), 1.5, 'kHz', 1e3)),
   maximumDuty: optional(between(0.3, 0.97).map((duty) => `${Number((100 * duty).toPrecision(4))} %`)),
   'rectifier.drop': optional(toleranced(ranged(between(0.2, 0.9), 1, 'V'))),
@@ -64,8 +64,8 @@ const rest = fc.record({
   'losses.rectifier': optional(toleranced(ranged(logarithmic(1e-3, 0.2), 1, 'mOhm', 1e-3)), 2),
   load: optional(ranged(logarithmic(0.01, 3), 10, 'A')),
   minimumOnTime: optional(ranged(logarithmic(1e-8, 4e-7), 1, 'ns', 1e-9), 3),
-  senseGain: optional(toleranced(ranged(logarithmic(1e-3, 0.3), 1, 'mV/A', 1e-3))),
-  'goal.dampingIndex': optional(between(0.55, 1.2)),
+  senseGain: optional(toleranced(ranged(logarithmic(1e-3, 0.1), 1, 'mV/A', 1e-3))),
+  'goal.dampingIndex': optional(between(0.7, 1.2)),
   'ramp.law': optional(fc.constantFrom('vin', 'fixed')),
   'ramp.supply': optional(toleranced(ranged(between(3, 12), 1, 'V')), 2),
   'ramp.capacitance': optional(toleranced(ranged(logarithmic(5e-11, 5e-9), 1, 'pF', 1e-12)), 5),

@@ -15,6 +15,7 @@ import type { BoardOpampSizing } from './candidate.ts';
  */
 export function buildBoardOpamp(sizing: BoardOpampSizing, demand: RampDemand): Circuit {
   return {
+    build: 'board-opamp',
     name: 'ramp_generator',
     ports: [
       {

@@ -37,19 +37,26 @@ export interface SpreadPoint {
  */
 export function spreadCauses(demand: RampDemand, point: SpreadPoint): readonly SpreadCause[] {
   const r = resistorTolerance(demand.series.resistor);
-  const feedback = point.degenerationLow_V + thermalVoltage_V;
-  const mismatch = point.degenerationLow_V / feedback;
+  const offset_V = opamp.offset_V + opamp.inputBias_A * point.dividerSource_ohm;
+  const set = { parameter: 'set resistor', low: 1 / (1 + r) - 1, high: 1 / (1 - r) - 1 };
+  const input = [
+    set,
+    divider(r, point.dividerRatio),
+    symmetric('op-amp offset', offset_V / point.setVoltageLow_V),
+  ];
+  // The current that the mirror is fed with moves its emitter voltage, and with that its own errors.
+  const fed = worstSpread(input);
+  const feedback = point.degenerationLow_V * (1 - r) * fed.low + thermalVoltage_V;
+  const most_V = point.degenerationLow_V * (1 + r) * fed.high;
+  const mismatch = most_V / (most_V + thermalVoltage_V);
   const pair = bipolar.pairOffset_V / feedback;
   const nominal = mirrorRatio(bipolar.currentGain);
   const early = (demand.supply_V.high / bipolar.earlyVoltage_V) * (thermalVoltage_V / feedback);
-  const offset_V = opamp.offset_V + opamp.inputBias_A * point.dividerSource_ohm;
   return [
     ...capacitances(demand, point),
-    { parameter: 'set resistor', low: 1 / (1 + r) - 1, high: 1 / (1 - r) - 1 },
-    divider(r, point.dividerRatio),
+    ...input,
     { parameter: 'mirror resistors', low: -2 * r * mismatch, high: ratioHigh(r) * mismatch },
     { parameter: 'mirror pair offset', low: -pair, high: Math.exp(pair) - 1 },
-    symmetric('op-amp offset', offset_V / point.setVoltageLow_V),
     { parameter: 'summing resistors', low: 1 / (1 + ratioHigh(r)) - 1, high: ratioHigh(r) },
     symmetric('reference', demand.trackToleranceRatio),
     {
@@ -60,7 +67,8 @@ export function spreadCauses(demand: RampDemand, point: SpreadPoint): readonly S
     { parameter: 'Early effect', low: 0, high: early },
     {
       parameter: 'leakage',
-      low: -(resetSwitch.leakage_A + opamp.inputBias_A) / point.chargingCurrentLow_A,
+      low:
+        -(resetSwitch.leakage_A + opamp.inputBias_A) / (point.chargingCurrentLow_A * Math.max(fed.low, 0.5)),
       high: 0,
     },
   ];

@@ -51,7 +51,18 @@ function stabilityRows({ stability, region, specification }: Result, paint: Pain
   return [
     ...(isStable ? row('stable', verdict) : row('failed', verdict, paint.bad)),
     ...row('', `${aim}x up to ${plainNumber(most)} (${pointText(atMax)})${settling}`),
+    ...region.cut.flatMap((cut, index) => row(index === 0 ? 'limited' : '', cutText(cut))),
   ];
+}
+
+/** The part of the asked-for region that the duty limits take away. */
+function cutText(cut: Result['region']['cut'][number]): string {
+  const span = (values: unknown) => {
+    const [low, high] = values as readonly [number, number];
+    return together(low === high ? volts(low) : `${volts(low)} to ${volts(high)}`);
+  };
+  const output = Array.isArray(cut.outputVoltage_V) ? `, ${span(cut.outputVoltage_V)} out` : '';
+  return `not regulated within ${span(cut.inputVoltage_V)} in${output}: ${cut.reason}`;
 }
 
 function everyDuty(highest: number): string {
@@ -106,24 +117,21 @@ function cycleRatios({ cycleRatioMin, cycleRatioMax }: Cost): string {
 /** More would push the verdicts off the screen; bom.csv has them all. */
 const mostPartLines = 3;
 
-function buildRows({ parts, specification }: Result): string[] {
+function buildRows(result: Result): string[] {
+  const { parts } = result;
   const named = ['capacitor', 'resistor'].flatMap((kind) => parts.filter((part) => part.kind === kind));
   const others = parts
     .filter((part) => !named.includes(part))
     .reduce((sum, { quantity }) => sum + quantity, 0);
   const texts = named.map(({ reference, text }) => together(`${reference} ${text}`));
-  const rows = row(
-    'build',
-    `${buildOf(specification)}: ${[...texts, together(`and ${others} more`)].join(', ')}`,
-  );
+  const rows = row('build', `${buildOf(result)}: ${[...texts, together(`and ${others} more`)].join(', ')}`);
   if (rows.length <= mostPartLines) return rows;
   return [...rows.slice(0, mostPartLines - 1), ...row('', `… ${parts.length} parts in all`)];
 }
 
-function buildOf(specification: Result['specification']): string {
-  const ramp = specification.ramp as { readonly build?: unknown; readonly injection?: unknown } | undefined;
-  const name = typeof ramp?.build === 'string' && ramp.build !== 'auto' ? `${ramp.build}, ` : '';
-  return `${name}injected at ${String(ramp?.injection ?? 'sense')}`;
+function buildOf({ ramp, specification }: Result): string {
+  const { injection } = specification.ramp as { readonly injection: string };
+  return `${ramp.build}, injected at ${injection}`;
 }
 
 function rampRows({ ramp, region }: Result): string[] {

@@ -31,7 +31,14 @@ export function checkPoints(
   const over = reach(observable(design, law.extremes.max.at));
   const halfWay = (point: RegionPoint) =>
     reach(observable(design, mix(design, point, centre(design, point), 0.5)));
-  return distinct([worst, over, halfWay(worst), halfWay(over), mix(design, worst, over, 0.5)]).slice(0, 3);
+  const far = reach(observable(design, farthest(design, worst)));
+  return distinct([worst, over, halfWay(worst), far, halfWay(over), halfWay(far)]).slice(0, 3);
+}
+
+/** The vertex whose input voltage is farthest, as a ratio: where the most over-compensated is the worst itself. */
+function farthest({ region }: SizedDesign, from: RegionPoint): RegionPoint {
+  const distance = (point: RegionPoint) => Math.abs(Math.log(point.inputVoltage_V / from.inputVoltage_V));
+  return region.vertices.reduce((a, b) => (distance(b) > distance(a) ? b : a));
 }
 
 function observable(design: SizedDesign, from: RegionPoint): RegionPoint {
@@ -39,7 +46,12 @@ function observable(design: SizedDesign, from: RegionPoint): RegionPoint {
   const settled = (lagsToSettle * followerLag_s) / design.demand.period_s;
   const low = Math.max(dutyFloor, leastDuty(specification), settled);
   const high = specification.maximumDutyRatio - dutyMargin;
-  return slide(design, from, centre(design, from), ({ duty }) => duty >= low && duty <= high);
+  return slide(
+    design,
+    from,
+    centre(design, from),
+    ({ duty, outputVoltage_V }) => duty >= low && duty <= high && outputVoltage_V > 0,
+  );
 }
 
 /** The first point on the way from one to the other that is accepted; the far end where none is. */

@@ -1,4 +1,4 @@
-/** Which combination of states is watched: the comparator's, or the rise of a current that is at zero. */
+/** What is watched: the comparator's signal, the inductor current, or whether a current at zero is driven again. */
 export type Watched = 'trip' | 'current' | 'restart';
 
 /**

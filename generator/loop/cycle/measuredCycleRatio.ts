@@ -1,5 +1,6 @@
 import type { CycleRun } from './CycleRun.ts';
-import { differences, type PeriodicOrbit } from './periodicOrbit.ts';
+import { differences } from './differences.ts';
+import type { PeriodicOrbit } from './periodicOrbit.ts';
 import { runCycles } from './runCycles.ts';
 
 /** A perturbation after which nothing is left of this share counts as settled (one hundredth: common practice). */

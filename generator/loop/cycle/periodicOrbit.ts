@@ -1,4 +1,5 @@
 import type { CycleRecord, CycleRun } from './CycleRun.ts';
+import { differences } from './differences.ts';
 import { runCycles } from './runCycles.ts';
 import { solveLinear } from './solveLinear.ts';
 import { rampSlope, switching } from './switching.ts';
@@ -17,12 +18,12 @@ export interface PeriodicOrbit {
   readonly cycle: CycleRecord;
 }
 
+/** Of the unknown: what Newton's method makes of the error in its slopes is smaller still. */
+const differenceStep = 1e-5;
 const iterations = 60;
 const halvings = 30;
 /** Relative to the largest of state and control. */
 const converged = 2e-14;
-/** Of the unknown it moves: the error of a central difference is its square. */
-const differenceStep = 1e-5;
 /** Duties at which the comparator is made to trip where the first attempt does not converge. */
 const duties = [0.5, 0.25, 0.75, 0.1, 0.9];
 /** Cycles run before a last attempt: a stable orbit draws them in. */
@@ -92,7 +93,7 @@ function newton(evaluate: (unknowns: readonly number[]) => number[], start: numb
   let missed = evaluate(unknowns);
   for (let iteration = 0; iteration < iterations; iteration += 1) {
     const scale = Math.max(...unknowns.map(Math.abs), Number.MIN_VALUE);
-    const step = solveLinear(differences(evaluate, unknowns, scale), missed);
+    const step = solveLinear(differences(evaluate, unknowns, scale, differenceStep), missed);
     if (step === null || !step.every(Number.isFinite)) return null;
     const better = downhill(evaluate, unknowns, step, missed);
     if (Math.max(...step.map(Math.abs)) <= converged * scale || better === null)
@@ -115,23 +116,6 @@ function downhill(
     if (size(left) < size(missed)) return { unknowns, missed: left };
   }
   return null;
-}
-
-/** Jacobian by central differences: rows of residuals, columns of unknowns. */
-export function differences(
-  evaluate: (unknowns: readonly number[]) => number[],
-  at: readonly number[],
-  scale: number,
-  share = differenceStep,
-): number[][] {
-  const columns = at.map((value, place) => {
-    const step = share * Math.max(Math.abs(value), 1e-3 * scale);
-    const beside = (sign: number) => evaluate(at.map((x, other) => (other === place ? x + sign * step : x)));
-    const above = beside(1);
-    const below = beside(-1);
-    return above.map((high, row) => (high - below[row]!) / (2 * step));
-  });
-  return columns[0]!.map((_, row) => columns.map((column) => column[row]!));
 }
 
 function size(values: readonly number[]): number {

@@ -64,7 +64,8 @@ type ThreadOpening =
 
 async function openThread(url: URL): Promise<ThreadOpening> {
   // Piped, so that nothing the engine prints reaches the user's terminal; read, so that no pipe fills.
-  const thread = new Worker(url, { stdout: true, stderr: true });
+  // Options of the user's own node (`--input-type`) are not the worker's.
+  const thread = new Worker(url, { stdout: true, stderr: true, execArgv: [] });
   thread.stdout.resume();
   thread.stderr.resume();
   const banner = await listen<{ text: string } | { reason: string }>(thread, OPENING_LIMIT_S, {

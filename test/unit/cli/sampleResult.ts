@@ -48,6 +48,7 @@ export const sampleResult: Result = {
     settlingCyclesMax: 5,
   },
   ramp: {
+    build: 'board-opamp',
     capacitance_F: 470e-12,
     current_A: [55.2e-6, 248e-6],
     capacitorSlope_V_per_s: [117_000, 528_000],
