@@ -88,12 +88,21 @@ function comparedLaw(
   };
 }
 
-/** Over the region, for a unit at the corners of λ: the share grows with the ramp. */
+/**
+ * Over the region, for a unit at the corners of λ: the share grows with the ramp over the up slope, which is
+ * linear-fractional in the point where the corners are the same everywhere, and so extreme at the vertices.
+ */
 function rampShare(law: Law, gain: number, region: OperatingRegion, corners: LoopCorners): Interval {
   const share = (side: 'low' | 'high') => (at: RegionPoint) => {
     const ramp_V = corners.at(at).lambda[side] * law.ramp_V(gain, at);
     return ramp_V === 0 ? 0 : ramp_V / (at.up_V + ramp_V);
   };
+  const { vertices } = region;
+  if (corners.isUniform)
+    return {
+      low: Math.min(...vertices.map(share('low'))),
+      high: Math.max(...vertices.map(share('high'))),
+    };
   return {
     low: extremesOver(region, share('low')).min.value,
     high: extremesOver(region, share('high')).max.value,

@@ -11,10 +11,10 @@ export interface Extremes {
 }
 
 /** Shares of a line at which it is looked at to bracket its extremes: closer at its ends, where one may hide. */
-const nearEnd = [0, 2 ** -14, 2 ** -11, 2 ** -8, 2 ** -6];
+const nearEnd = [0, 2 ** -14, 2 ** -10, 2 ** -6];
 const shares = [
   ...nearEnd,
-  ...Array.from({ length: 15 }, (_, index) => (index + 1) / 16),
+  ...Array.from({ length: 7 }, (_, index) => (index + 1) / 8),
   ...nearEnd.map((share) => 1 - share).reverse(),
 ];
 const goldenRatio = (Math.sqrt(5) - 1) / 2;
@@ -39,8 +39,10 @@ export function extremesOver(region: OperatingRegion, figure: (point: RegionPoin
       if (value > max.value) max = { at, value };
       return value;
     };
-    for (const { share, sign } of peaks(values, min.value, max.value))
-      goldenSection((t) => sign * found(t), shares[share - 1]!, shares[share + 1]!);
+    for (let share = 1; share < values.length - 1; share += 1) {
+      const sign = peakSign(values, share, min.value, max.value);
+      if (sign !== 0) goldenSection((t) => sign * found(t), shares[share - 1]!, shares[share + 1]!);
+    }
   }
   return { min, max };
 }
@@ -61,15 +63,16 @@ function linesOf(region: OperatingRegion): readonly Line[] {
   const lines = region.vertices.flatMap((from, index) =>
     region.vertices
       .slice(index + 1)
-      .filter((to) => from.outputIndex === to.outputIndex && differences(from, to) <= 2)
+      .filter((to) => isOnFace(from, to))
       .map((to) => ({ from, to, points: shares.map((t) => pointBetween(region, from, to, t)) })),
   );
   linesFound.set(region, lines);
   return lines;
 }
 
-/** How many things that vary tell two vertices apart: up to two, and the line between them is on a face. */
-function differences(a: RegionPoint, b: RegionPoint): number {
+/** Whether two vertices belong to one output and differ in no more than two things: then a face holds both. */
+export function isOnFace(a: RegionPoint, b: RegionPoint): boolean {
+  if (a.outputIndex !== b.outputIndex) return false;
   const isOther = [
     a.inputVoltage_V !== b.inputVoltage_V,
     a.outputVoltage_V !== b.outputVoltage_V && Math.abs(a.duty - b.duty) > 1e-9,
@@ -79,21 +82,19 @@ function differences(a: RegionPoint, b: RegionPoint): number {
       a.drops.winding_ohm !== b.drops.winding_ohm ||
       a.drops.rectifier_ohm !== b.drops.rectifier_ohm,
   ];
-  return isOther.filter(Boolean).length;
+  return isOther.filter(Boolean).length <= 2;
 }
 
 /**
- * Shares about which a figure is stationary inside, as far as the shares resolve it, and could be beyond what
- * is known: it does not rise above a sample by more than that stands above its lower neighbour.
+ * Whether a figure has a maximum (1), a minimum (−1) or neither about a share, as far as the shares resolve it,
+ * that could be beyond what is known: it does not rise above a sample by more than that stands above its
+ * lower neighbour.
  */
-function* peaks(values: readonly number[], least: number, most: number) {
-  for (let share = 1; share < values.length - 1; share += 1) {
-    const [before, value, after] = [values[share - 1]!, values[share]!, values[share + 1]!];
-    if (value > before && value > after && 2 * value - Math.min(before, after) > most)
-      yield { share, sign: 1 };
-    if (value < before && value < after && 2 * value - Math.max(before, after) < least)
-      yield { share, sign: -1 };
-  }
+function peakSign(values: readonly number[], share: number, least: number, most: number): number {
+  const [before, value, after] = [values[share - 1]!, values[share]!, values[share + 1]!];
+  if (value > before && value > after && 2 * value - Math.min(before, after) > most) return 1;
+  if (value < before && value < after && 2 * value - Math.max(before, after) < least) return -1;
+  return 0;
 }
 
 /** The point at a share of the way between two of one output; their drops are mixed as well. */

@@ -1,5 +1,5 @@
 import { bisect } from '../base/bisect.ts';
-import { pointBetween } from './extremesOver.ts';
+import { isOnFace, pointBetween } from './extremesOver.ts';
 import type { OperatingRegion, RegionPoint } from './OperatingRegion.ts';
 
 /** Points of a region at which the duty has a value: where it crosses the lines between vertices. */
@@ -11,14 +11,14 @@ export function pointsAtDuty(region: OperatingRegion, duty: number): RegionPoint
  * Points of a region at which a figure changes sign on the lines between vertices, on its side that is not
  * positive.
  *
- * Lines inside the region count too: every vertex of the slice is among them.
+ * Every vertex of the slice is among them; further points of its faces do no harm.
  */
 export function pointsAtZero(region: OperatingRegion, figure: (point: RegionPoint) => number): RegionPoint[] {
   const valued = region.vertices.map((at) => ({ at, isAbove: figure(at) > 0 }));
   return valued.flatMap((a, index) =>
     valued
       .slice(index + 1)
-      .filter((b) => a.at.outputIndex === b.at.outputIndex && a.isAbove !== b.isAbove)
+      .filter((b) => a.isAbove !== b.isAbove && isOnFace(a.at, b.at))
       .map((b) => (b.isAbove ? crossing(region, a.at, b.at, figure) : crossing(region, b.at, a.at, figure))),
   );
 }

@@ -143,7 +143,7 @@ test.each(['fixed', 'vin', 'vout', 'constant-q'] as const)(
   },
 );
 
-test('no limit and no line response at a random point is beyond those of the region', {
+test('no limit, line response or share of the ramp at a random point is beyond those of the region', {
   timeout: 300_000,
 }, async () => {
   let judged = 0;
@@ -156,10 +156,17 @@ test('no limit and no line response at a random point is beyond those of the reg
     fc.asyncProperty(limited, fc.integer(), async (keys, seed) => {
       const outcome = compare(await requestOf(keys));
       if (!outcome.ok) return;
-      const { request, region, laws: compared } = outcome.value;
+      const { request, region, corners, laws: compared } = outcome.value;
       const points = randomPoints(request.specification, region, samples, seed);
       for (const law of compared) {
         judged += 1;
+        for (const at of points) {
+          const ramp_V = law.law.ramp_V(law.required.gain, at);
+          const share = (lambda: number) => (lambda * ramp_V) / (at.up_V + lambda * ramp_V || 1);
+          const { low, high } = corners.at(at).lambda;
+          expect(share(low)).toBeGreaterThanOrEqual(law.rampShare.low - slack);
+          expect(share(high)).toBeLessThanOrEqual(law.rampShare.high + slack);
+        }
         for (const [interval, figure] of [
           [law.peakLimit_A, peakLimit_A],
           [law.outputLimit_A, outputLimit_A],
