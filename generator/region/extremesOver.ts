@@ -91,7 +91,9 @@ export function isOnFace(a: RegionPoint, b: RegionPoint): boolean {
  * lower neighbour.
  */
 function peakSign(values: readonly number[], share: number, least: number, most: number): number {
-  const [before, value, after] = [values[share - 1]!, values[share]!, values[share + 1]!];
+  const before = values[share - 1]!;
+  const value = values[share]!;
+  const after = values[share + 1]!;
   if (value > before && value > after && 2 * value - Math.min(before, after) > most) return 1;
   if (value < before && value < after && 2 * value - Math.max(before, after) < least) return -1;
   return 0;
