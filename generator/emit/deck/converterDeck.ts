@@ -25,7 +25,11 @@ export interface ConverterDeck {
   readonly stop_s: number;
   readonly period_s: number;
   readonly point: RegionPoint;
+  /** Between these the comparator ends an on-time: after blanking, before the clocked turn-off [s]. */
+  readonly comparatorEnds: { readonly from_s: number; readonly to_s: number };
+  /** Of the slopes at the mean current. */
   readonly dampingIndex: number;
+  /** With every resistance of the deck. */
   readonly cycleRatio: number;
 }
 
@@ -92,6 +96,7 @@ export function converterDeck(
     stop_s,
     period_s: timing.period_s,
     point,
+    comparatorEnds: { from_s: blanking_s + 1.5 * timing.edge_s, to_s: timing.rise_s - 1.5 * timing.edge_s },
     dampingIndex: state.dampingIndex,
     cycleRatio: state.cycleRatio,
   };
