@@ -30,7 +30,7 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
     corners,
     laws,
     verdict: verdict(specification, region.value, corners, laws),
-    lightLoad: hasInductance(corners) ? lightLoad(specification, region.value, corners, period_s) : null,
+    lightLoad: hasInductance(corners) ? lightLoad(specification, region.value, corners) : null,
     neededRamp: neededRamp(region.value, specification.goal.dampingIndex),
     notes: comparisonNotes(specification, region.value, corners, laws),
   });

@@ -1,3 +1,4 @@
+import { slewNeeded_V_per_s } from './boardOpamp/slewNeeded.ts';
 import { bipolar, followerLag_s, nodeCapacitance_F, opamp } from './DeviceModels.ts';
 import { currentSourceVoltages, rampFigures } from './rampFigures.ts';
 import type { SizedDesign } from './SizedDesign.ts';
@@ -55,6 +56,7 @@ export function circuitFigures(design: SizedDesign): readonly Figure[] {
       sizing.capacitance_F / 10,
     ),
     own('buffer lag', followerLag_s, 's'),
+    own('slew rate that the buffer needs for the reset', slewNeeded_V_per_s(sizing, demand), 'V/s'),
     own(
       'divider filter time constant',
       sizing.divider.source_ohm * (sizing.divider.filter_F ?? opamp.inputCapacitance_F),

@@ -2,6 +2,7 @@ import type { Assumption } from '../base/Assumption.ts';
 import type { SizedDesign } from '../circuit/SizedDesign.ts';
 import { dampingIndex } from '../law/innerLoop.ts';
 import { ownRamp_V } from '../law/leastGain.ts';
+import { lightLoad } from '../loop/lightLoad.ts';
 import { rampReference } from '../ramp/demandOf.ts';
 import type { RegionPoint } from '../region/OperatingRegion.ts';
 
@@ -45,6 +46,15 @@ export function designAssumptions(design: SizedDesign): readonly Assumption[] {
       unit: 'V',
       reason:
         'the fixed ramp is fed from a reference of 2.5 V within 1 %, as a shunt reference or the controller offers',
+    });
+  const { borderLoad_A, notes } = lightLoad(specification, design.region, design.corners);
+  const least_A = specification.load_A?.from.low ?? 0;
+  if (least_A < borderLoad_A.high)
+    assumptions.push({
+      key: 'continuous conduction',
+      value: borderLoad_A.high,
+      unit: 'A',
+      reason: notes.join(' '),
     });
   return assumptions;
 }

@@ -64,7 +64,7 @@ export function rampTable({ ramp, region }: Result): TableView {
       pair('current signal at the trip', ramp.signalAtTrip_V, 'V'),
       both('ramp injected per capacitor volt', percent(ramp.injectionGainRatio, 3)),
       both('current signal left by the summing resistors', percent(ramp.senseAttenuationRatio, 3)),
-      both('time to reset', figure(ramp.resetTime_s, 's')),
+      both('time left for the reset', figure(ramp.resetTime_s, 's')),
     ],
   );
 }

@@ -67,7 +67,7 @@ function isBelowGoal({ request }: SizedDesign, index: number): boolean {
 
 function reach({ region }: SizedDesign): string {
   if (region.outputVoltage_V === null) return `at every duty to ${percent(region.duty.high)}`;
-  return 'over the whole region';
+  return region.cuts.length > 0 ? 'wherever the duty allows to regulate' : 'over the whole region';
 }
 
 export function pointText({ inputVoltage_V, outputVoltage_V, dutyRatio }: WorstPoint): string {

@@ -68,7 +68,7 @@ describe('the note on light load', () => {
       load: '0.01 A to 1 A',
     });
     if (!hasInductance(corners)) throw new Error('no inductance');
-    return lightLoad(request.specification, region, corners, 2e-6).notes.join(' ');
+    return lightLoad(request.specification, region, corners).notes.join(' ');
   }
 
   test('speaks of the instability above 2/3, and not below', async () => {

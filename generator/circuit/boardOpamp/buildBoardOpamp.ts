@@ -6,6 +6,7 @@ import type { Circuit, Component } from '../Circuit.ts';
 import { passive, semiconductor, strayCapacitor } from '../component.ts';
 import { resetSwitch, stray } from '../DeviceModels.ts';
 import type { BoardOpampSizing } from './candidate.ts';
+import { slewNeeded_V_per_s } from './slewNeeded.ts';
 
 /**
  * The op-amp build as a circuit.
@@ -98,7 +99,7 @@ function currentSource(sizing: BoardOpampSizing, demand: RampDemand): Component[
       'dual op-amp: voltage to current',
       ['scaled', 'set', 'vcc', 'drive'],
       'opamp_rr',
-      opampRating(demand),
+      opampRating(sizing, demand),
     ),
     passive('resistor', 'R3', 'base stopper', ['drive', 'base'], 1e3, {
       series: 'E24',
@@ -176,7 +177,7 @@ function rampNode(sizing: BoardOpampSizing, demand: RampDemand): Component[] {
       'dual op-amp: buffer',
       ['ramp', 'buffer', 'vcc', 'buffer'],
       'opamp_rr',
-      opampRating(demand),
+      opampRating(sizing, demand),
     ),
     passive('capacitor', 'C3', 'supply decoupling', ['vcc', '0'], 100e-9, {
       series: 'E6',
@@ -207,8 +208,9 @@ function summing(sizing: BoardOpampSizing, demand: RampDemand): Component[] {
   ];
 }
 
-function opampRating(demand: RampDemand): string {
-  return `rail to rail in and out, ≥ 20 MHz, offset ≤ 1 mV, supply ${engineering(demand.supply_V.low, 'V')} to ${engineering(demand.supply_V.high, 'V')}`;
+function opampRating(sizing: BoardOpampSizing, demand: RampDemand): string {
+  const slew = engineering(slewNeeded_V_per_s(sizing, demand) / 1e6, 'V/µs', 2);
+  return `rail to rail in and out, ≥ 20 MHz, slew rate ≥ ${slew}, offset ≤ 1 mV, supply ${engineering(demand.supply_V.low, 'V')} to ${engineering(demand.supply_V.high, 'V')}`;
 }
 
 function choice(demand: RampDemand, rating: string) {

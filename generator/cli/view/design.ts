@@ -40,7 +40,7 @@ function titleRow({ specification }: Result, paint: Paint): string[] {
 function stabilityRows({ stability, region, specification }: Result, paint: Paint): string[] {
   const { dampingIndexMin: least, dampingIndexMax: most, at, atMax } = stability;
   const isStable = least > 0.5;
-  const where = region.outputVoltage_V === null ? everyDuty(region.duty[1]) : 'over the whole region';
+  const where = region.outputVoltage_V === null ? everyDuty(region.duty[1]) : reach(region);
   const verdict = isStable
     ? `yes, ${where}: x at least ${plainNumber(least)} (${pointText(at)})`
     : `not stable everywhere: x only ${plainNumber(least)} (${pointText(at)}); ½ is the edge`;
@@ -63,6 +63,10 @@ function cutText(cut: Result['region']['cut'][number]): string {
   };
   const output = Array.isArray(cut.outputVoltage_V) ? `, ${span(cut.outputVoltage_V)} out` : '';
   return `not regulated within ${span(cut.inputVoltage_V)} in${output}: ${cut.reason}`;
+}
+
+function reach({ cut }: Result['region']): string {
+  return cut.length > 0 ? 'wherever the duty allows to regulate' : 'over the whole region';
 }
 
 function everyDuty(highest: number): string {
@@ -105,7 +109,12 @@ function costRows(own: Cost, kind: string, alternative: Alternative | null): str
     together(`${name}  x to ${plainNumber(cost.dampingIndexMax)}, α ${cycleRatios(cost)}`);
   if (alternative === null) return row('cost', text(kind, own));
   const other = `${alternative.kind} instead`;
-  return [...row('cost', text(kind.padEnd(other.length), own)), ...row('', text(other, alternative))];
+  const simpler = kind !== 'fixed' && alternative.dampingIndexMax <= own.dampingIndexMax;
+  return [
+    ...row('cost', text(kind.padEnd(other.length), own)),
+    ...row('', text(other, alternative)),
+    ...(simpler ? row('', 'for damping the fixed ramp is at least as good here: --law fixed') : []),
+  ];
 }
 
 type Cost = Pick<Alternative, 'dampingIndexMax' | 'cycleRatioMin' | 'cycleRatioMax'>;
@@ -129,9 +138,10 @@ function buildRows(result: Result): string[] {
   return [...rows.slice(0, mostPartLines - 1), ...row('', `… ${parts.length} parts in all`)];
 }
 
-function buildOf({ ramp, specification }: Result): string {
+function buildOf({ law, ramp, specification }: Result): string {
   const { injection } = specification.ramp as { readonly injection: string };
-  return `${ramp.build}, injected at ${injection}`;
+  const feed = law.kind === 'fixed' ? ', fed from a 2.5 V reference' : '';
+  return `${ramp.build}${feed}, injected at ${injection}`;
 }
 
 function rampRows({ ramp, region }: Result): string[] {

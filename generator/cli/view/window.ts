@@ -23,7 +23,7 @@ export function windowView(
     ...row('window', verdict(rows), paint.strong),
     ...row(
       'holds for',
-      `x from ${plainNumber(goal.dampingIndex)} (goal) to ${plainNumber(goal.ceilingIndex)} (ceiling) over the whole input range; the inductance at the trip current, tolerance and saturation included`,
+      `x from ${plainNumber(goal.dampingIndex)} (goal) to ${plainNumber(goal.ceilingIndex)} (ceiling) over the whole input range; the inductance that a part really has at the trip current: leave room for its tolerance and saturation`,
     ),
     ...row('ramp', rampText(specification)),
     rule,

@@ -26,8 +26,9 @@ export function checkPoints(
   fits: (inputVoltage_V: number) => boolean,
 ): readonly RegionPoint[] {
   const worst = observable(design, law.extremes.min.at);
+  const carried = ({ inputVoltage_V }: RegionPoint) => fits(inputVoltage_V);
   const reach = (point: RegionPoint) =>
-    slide(design, point, worst, (candidate) => fits(candidate.inputVoltage_V));
+    nearestOnWay(design, point, [worst, ...sameOutput(design, point)], carried) ?? worst;
   const over = reach(observable(design, law.extremes.max.at));
   const halfWay = (point: RegionPoint) =>
     reach(observable(design, mix(design, point, centre(design, point), 0.5)));
@@ -41,36 +42,50 @@ function farthest({ region }: SizedDesign, from: RegionPoint): RegionPoint {
   return region.vertices.reduce((a, b) => (distance(b) > distance(a) ? b : a));
 }
 
+/**
+ * The nearest point at which the comparator ends the on-time, with the ramp settled by then: of the same
+ * output if it has one.
+ *
+ * Where no output has one, that of the longest on-time which the comparator still ends.
+ */
 function observable(design: SizedDesign, from: RegionPoint): RegionPoint {
   const { specification } = design.request;
   const settled = (lagsToSettle * followerLag_s) / design.demand.period_s;
   const low = Math.max(dutyFloor, leastDuty(specification), settled);
   const high = specification.maximumDutyRatio - dutyMargin;
-  return slide(
-    design,
-    from,
-    centre(design, from),
-    ({ duty, outputVoltage_V }) => duty >= low && duty <= high && outputVoltage_V > 0,
-  );
+  const isEnded = ({ duty, outputVoltage_V }: RegionPoint) => duty <= high && outputVoltage_V > 0;
+  const accepts = (point: RegionPoint) => isEnded(point) && point.duty >= low;
+  const { vertices } = design.region;
+  for (const start of [from, ...vertices]) {
+    const found = nearestOnWay(design, start, [centre(design, start), ...sameOutput(design, start)], accepts);
+    if (found !== null) return found;
+  }
+  const ended = vertices.filter(isEnded);
+  const longest = (ended.length > 0 ? ended : vertices).reduce((a, b) => (b.duty > a.duty ? b : a));
+  return mix(design, longest, longest, 0);
 }
 
-/** The first point on the way from one to the other that is accepted; the far end where none is. */
-function slide(
+/** The first point that is accepted on any of the ways, none where there is none. */
+function nearestOnWay(
   design: SizedDesign,
   from: RegionPoint,
-  to: RegionPoint,
+  ways: readonly RegionPoint[],
   accepts: (point: RegionPoint) => boolean,
-): RegionPoint {
-  for (let move = 0; move < moves; move += 1) {
-    const point = mix(design, from, to, move / moves);
-    if (accepts(point)) return point;
+): RegionPoint | null {
+  for (let move = 0; move <= moves; move += 1) {
+    const point = ways.map((to) => mix(design, from, to, move / moves)).find(accepts);
+    if (point !== undefined) return point;
   }
-  return mix(design, from, to, 1);
+  return null;
+}
+
+function sameOutput({ region }: SizedDesign, point: RegionPoint): readonly RegionPoint[] {
+  return region.vertices.filter((vertex) => vertex.outputIndex === point.outputIndex);
 }
 
 /** Mean of the vertices that belong to the same output. */
-function centre({ region }: SizedDesign, from: RegionPoint): RegionPoint {
-  const same = region.vertices.filter((vertex) => vertex.outputIndex === from.outputIndex);
+function centre(design: SizedDesign, from: RegionPoint): RegionPoint {
+  const same = sameOutput(design, from);
   const mean = (pick: (point: RegionPoint) => number) =>
     same.reduce((sum, point) => sum + pick(point), 0) / same.length;
   return {

@@ -1,6 +1,5 @@
 import converterTemplate from '../../../templates/converter.cir.hbs';
 import { engineering } from '../../base/engineering.ts';
-import { rampFigures, senseAttenuation } from '../../circuit/rampFigures.ts';
 import type { SizedDesign, SizedLaw } from '../../circuit/SizedDesign.ts';
 import type { RegionPoint } from '../../region/OperatingRegion.ts';
 import { fixedNumber } from '../text/fixedNumber.ts';
@@ -8,10 +7,17 @@ import { netlistComment } from '../text/netlistComment.ts';
 import { clockTiming } from './deckTiming.ts';
 import { operatingState } from './operatingState.ts';
 import { cyclePlan, perturbation } from './perturbation.ts';
-import { stageLines } from './stages/StageLines.ts';
 import { trackSource } from './trackSource.ts';
 
-const stepsPerPeriod = 1000;
+/** Time steps per period, and at least so many in an on-time. */
+const steps = { period: 1000, onTime: 80 } as const;
+
+/**
+ * Time after the clock in which the comparator is not heeded: as every controller has it, here for the drop
+ * with which the clock's edge begins the ramp. Shares of the period, the time of reset and the on-time.
+ */
+const blankingShare = { period: 0.02, reset: 0.3, onTime: 0.3 } as const;
+const blankingResistor_ohm = 1000;
 
 /** A converter deck's text with what it should show. */
 export interface ConverterDeck {
@@ -19,15 +25,18 @@ export interface ConverterDeck {
   readonly stop_s: number;
   readonly period_s: number;
   readonly point: RegionPoint;
+  /** Between these the comparator ends an on-time: after blanking, before the clocked turn-off [s]. */
+  readonly comparatorEnds: { readonly from_s: number; readonly to_s: number };
+  /** Of the slopes at the mean current. */
   readonly dampingIndex: number;
+  /** With every resistance of the deck. */
   readonly cycleRatio: number;
 }
 
 /**
  * The converter around the real ramp block, at one operating point.
  *
- * Started at the periodic current that the slopes predict; the control voltage follows from the peak and
- * the ramp at the trip.
+ * Started at the periodic current; the control voltage follows from the peak and the ramp at the trip.
  */
 export function converterDeck(
   design: SizedDesign,
@@ -37,29 +46,15 @@ export function converterDeck(
 ): ConverterDeck {
   const { specification } = design.request;
   const timing = clockTiming(design);
-  const inductance_H = design.corners.referenceInductance_H;
   const source = trackSource(design, kind, sized.realisedGain);
-  const state = operatingState(design, sized, point);
-  const senseGain = specification.senseGain_V_per_A.nominal;
-  const attenuation = senseAttenuation(design);
-  const onTime_s = point.duty * timing.period_s;
-  const figures = rampFigures(design, source.track_V(point.inputVoltage_V));
-  const atTrip_V =
-    (figures.comparatorSlope_V_per_s + state.internalSlope_V_per_s) * onTime_s +
-    attenuation * senseGain * (state.peak_A + state.freeSlope_A_per_s * onTime_s);
-  const stage = stageLines(specification.converter, {
-    ...point,
-    inductance_H,
-    initialCurrent_A: state.peak_A - state.ripple_A,
-    magnetizing: state.magnetizing,
-  });
-  const shift = perturbation(
-    point,
-    inductance_H,
-    timing.period_s,
-    state.ramp_V,
-    state.cycleRatio,
-    specification.maximumDutyRatio,
+  const state = operatingState(design, source.track_V(point.inputVoltage_V), point);
+  const { stage, orbit } = state;
+  const shift = perturbation(stage.equations, orbit, state.rampSlope_A_per_s, specification.maximumDutyRatio);
+  const stepsPerPeriod = Math.max(steps.period, 100 * Math.ceil(steps.onTime / orbit.duty / 100));
+  const blanking_s = Math.min(
+    blankingShare.period * timing.period_s,
+    blankingShare.reset * (timing.period_s - timing.rise_s),
+    blankingShare.onTime * orbit.duty * timing.period_s,
   );
   const supply = specification.ramp.supply_V.nominal;
   const stop_s = cyclePlan.total * timing.period_s;
@@ -81,17 +76,18 @@ export function converterDeck(
     low: fixedNumber(timing.low_s, 9),
     period: fixedNumber(timing.period_s, 9),
     stageName: stage.what,
-    stage: stage.lines,
+    stage: stage.lines(orbit.valley_A),
     models: stage.models,
     shiftFrom: 'shifted',
     shiftTo: 'wound',
     shift: shift.corners.map((value) => fixedNumber(value, 9)).join(' '),
-    senseGain: fixedNumber(senseGain),
+    senseGain: fixedNumber(specification.senseGain_V_per_A.nominal),
     internalRamp:
       state.internalSlope_V_per_s === 0 ? '' : fixedNumber(state.internalSlope_V_per_s * timing.low_s, 9),
-    control: fixedNumber(atTrip_V, 6),
+    control: fixedNumber(state.control_V, 9),
     clockShare: fixedNumber(1 / supply, 9),
     clearThreshold: fixedNumber(supply / 2),
+    blanking: fixedNumber(blanking_s / Math.LN2 / blankingResistor_ohm, 3),
     step: fixedNumber(timing.period_s / stepsPerPeriod, 9),
     stop: fixedNumber(stop_s, 9),
   });
@@ -100,6 +96,7 @@ export function converterDeck(
     stop_s,
     period_s: timing.period_s,
     point,
+    comparatorEnds: { from_s: blanking_s + 1.5 * timing.edge_s, to_s: timing.rise_s - 1.5 * timing.edge_s },
     dampingIndex: state.dampingIndex,
     cycleRatio: state.cycleRatio,
   };

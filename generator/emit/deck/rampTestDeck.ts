@@ -9,7 +9,7 @@ import { trackSource } from './trackSource.ts';
 /** Periods at each input voltage; the last one is measured. */
 export const periodsPerLevel = 22;
 /** Time steps per period of the ramp alone, which is nearly straight. */
-export const stepsPerPeriod = 500;
+export const stepsPerPeriod = 300;
 
 /** `ramp-test.cir`: its text, its input voltages and when each has settled. */
 export interface RampTestDeck {

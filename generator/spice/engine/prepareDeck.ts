@@ -46,7 +46,7 @@ export function prepareDeck(deck: Deck): PreparedDeck {
 }
 
 function runsCommands(text: string): boolean {
-  return /^\s*\.(control|exec)\b/im.test(text) || /^\*\s*ng_script/i.test(text);
+  return /^\s*\.(control|exec)\b/im.test(text) || /^\*ng_script/i.test(text);
 }
 
 function belowTheTitle(text: string, lines: readonly string[]): string {
