@@ -79,7 +79,7 @@ describeWith([CHROMIUM], 'the comparison in a browser', () => {
   it.each(['light', 'dark'])('has tints in even steps of lightness, %s', async (scheme) => {
     await seen(outputs['an output set by the customer'], 1280, scheme);
     const colours = await browser.evaluate<string[]>(
-      '[...Array(11).keys()].map((step) => getComputedStyle(document.documentElement).getPropertyValue(`--t${step}`).trim())',
+      '[...Array(11).keys()].map((step) => getComputedStyle(document.documentElement).getPropertyValue("--t" + step).trim())',
     );
     const lights = colours.map(lightness);
     const step = (lights.at(-1)! - lights[0]!) / 10;
