@@ -25,6 +25,8 @@ export interface ConverterDeck {
   readonly stop_s: number;
   readonly period_s: number;
   readonly point: RegionPoint;
+  /** By which the current is shifted before some clock edges. */
+  readonly shift_A: number;
   /** Between these the comparator ends an on-time: after blanking, before the clocked turn-off [s]. */
   readonly comparatorEnds: { readonly from_s: number; readonly to_s: number };
   /** Of the slopes at the mean current. */
@@ -96,7 +98,11 @@ export function converterDeck(
     stop_s,
     period_s: timing.period_s,
     point,
-    comparatorEnds: { from_s: blanking_s + 1.5 * timing.edge_s, to_s: timing.rise_s - 1.5 * timing.edge_s },
+    shift_A: shift.shift_A,
+    comparatorEnds: {
+      from_s: 1.5 * blanking_s + 0.5 * timing.edge_s,
+      to_s: timing.rise_s - 1.5 * timing.edge_s,
+    },
     dampingIndex: state.dampingIndex,
     cycleRatio: state.cycleRatio,
   };

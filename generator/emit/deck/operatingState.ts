@@ -1,4 +1,4 @@
-import { rampFigures, senseAttenuation } from '../../circuit/rampFigures.ts';
+import { clockEdge_s, rampFigures, rampStart_s, senseAttenuation } from '../../circuit/rampFigures.ts';
 import type { SizedDesign } from '../../circuit/SizedDesign.ts';
 import { dampingIndex } from '../../law/innerLoop.ts';
 import type { RegionPoint } from '../../region/OperatingRegion.ts';
@@ -39,7 +39,9 @@ export function operatingState(design: SizedDesign, track_V: number, point: Regi
 
   const figures = rampFigures(design, track_V);
   const perRamp = figures.senseSlope_V_per_s / figures.capacitorSlope_V_per_s;
-  const ramp = bufferedRamp(figures, onTime_s);
+  // The gate opens half-way down the clock's edge, the ramp starts later.
+  const behind_s = rampStart_s(design) - clockEdge_s(period_s) / 2;
+  const ramp = bufferedRamp(figures, Math.max(0, onTime_s - behind_s));
   const free_A_per_s = magnetizing === null ? 0 : magnetizing.rise_V / magnetizing.inductance_H;
   const internalSlope_V_per_s = specification.controller?.internalRamp_V_per_s?.nominal ?? 0;
   const internal_A_per_s = internalSlope_V_per_s / (attenuation * senseGain);

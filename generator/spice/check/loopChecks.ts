@@ -10,6 +10,9 @@ import type { Check, CheckedDeck } from './Check.ts';
 /** α may be off by this: a hundredth of the time step's granularity and more than what the switches cost. */
 const ratioLimit = 0.02;
 
+/** Of the shift: one shifted cycle among those that count spreads them by more than a quarter of it. */
+const leastSpread = 0.1;
+
 /** α of the inner loop from how the inductor current goes from one clock edge to the next. */
 export function loopChecks(decks: DeckSet): CheckedDeck[] {
   return [...decks.converters].map(([file, converter]) => ({
@@ -43,7 +46,10 @@ function ratioCheck(converter: ConverterDeck): Check {
  * The map is affine in these alone. An unstable loop grows until the clock ends its on-times: its α is read
  * from the cycles between.
  */
-function measuredRatio({ period_s, comparatorEnds }: ConverterDeck, { time_s, vectors }: Waveforms): number {
+function measuredRatio(
+  { period_s, shift_A, comparatorEnds }: ConverterDeck,
+  { time_s, vectors }: Waveforms,
+): number {
   const current = vectors['i(l1)']!;
   const edges = Array.from(
     { length: cyclePlan.total - cyclePlan.settled },
@@ -56,8 +62,10 @@ function measuredRatio({ period_s, comparatorEnds }: ConverterDeck, { time_s, ve
     return onTime_s < comparatorEnds.from_s || onTime_s > comparatorEnds.to_s;
   });
   const shifted = cyclePlan.shiftedEdges.map((edge) => edge - 1);
-  return affineCycleMap(
+  const { slope, spread } = affineCycleMap(
     edges.map((edge) => valueAt(time_s, current, edge * period_s)),
     [...shifted, ...endedOtherwise].map((edge) => edge - cyclePlan.settled),
-  ).slope;
+  );
+  if (spread < leastSpread * shift_A) throw new RangeError('no cycle shows the shifted current');
+  return slope;
 }
