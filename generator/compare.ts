@@ -1,4 +1,5 @@
 import { failure, type Outcome, success } from './base/Problem.ts';
+import { exactly } from './base/Quantity.ts';
 import { comparisonDocument } from './emit/comparisonDocument.ts';
 import type { ComparisonDocument } from './emit/comparisonSchema.ts';
 import { hasInductance, loopCorners } from './law/loopCorners.ts';
@@ -23,7 +24,9 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
   const undetermined = undeterminedInductance(request, corners);
   if (undetermined.length > 0) return failure(undetermined);
   const period_s = nominalPeriod_s(specification);
-  const laws = compareLaws(specification, region.value, corners, period_s);
+  const nominal = buildRegion(withNominalDrops(request), powerStageOf(specification));
+  const nominalRegion = nominal.ok ? nominal.value : region.value;
+  const laws = compareLaws(specification, region.value, nominalRegion, corners, period_s);
   return success({
     request,
     region: region.value,
@@ -34,6 +37,23 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
     neededRamp: neededRamp(region.value, specification.goal.dampingIndex),
     notes: comparisonNotes(specification, region.value, corners, laws),
   });
+}
+
+/** The same request with drops and losses as they are nominally. */
+function withNominalDrops(request: ReadSpecification): ReadSpecification {
+  const { losses, rectifierDrop_V } = request.specification;
+  return {
+    ...request,
+    specification: {
+      ...request.specification,
+      rectifierDrop_V: exactly(rectifierDrop_V.nominal),
+      losses: losses && {
+        switch_ohm: exactly(losses.switch_ohm.nominal),
+        winding_ohm: exactly(losses.winding_ohm.nominal),
+        rectifier_ohm: exactly(losses.rectifier_ohm.nominal),
+      },
+    },
+  };
 }
 
 /** The comparison as `compare --json` prints it. */

@@ -32,23 +32,28 @@ export interface ComparedLaw {
 
 const exact = { low: 1, high: 1 };
 
-/** Every law at the least gain that meets the goal, with what it does to damping, limits and line response. */
+/**
+ * Every law at the least gain that meets the goal, with what it does to damping, limits and line response.
+ * @param nominalRegion the region of a unit with nominal drops: limits and line response are those of one
+ */
 export function compareLaws(
   specification: Specification,
   region: OperatingRegion,
+  nominalRegion: OperatingRegion,
   corners: LoopCorners,
   period_s: number,
 ): ComparedLaw[] {
   return Object.values(laws).flatMap((law) => {
     const required = leastGain(law, region, corners, specification.goal.dampingIndex);
     if (!Number.isFinite(required.gain)) return [];
-    return [comparedLaw(specification, region, corners, period_s, law, required)];
+    return [comparedLaw(specification, region, nominalRegion, corners, period_s, law, required)];
   });
 }
 
 function comparedLaw(
   specification: Specification,
   region: OperatingRegion,
+  nominalRegion: OperatingRegion,
   corners: LoopCorners,
   period_s: number,
   law: Law,
@@ -66,7 +71,7 @@ function comparedLaw(
       : {
           law,
           gain: required.gain,
-          region,
+          region: nominalRegion,
           inductance_H,
           period_s,
           senseGain_V_per_A: senseGain_V_per_A.nominal,
@@ -82,9 +87,9 @@ function comparedLaw(
     dampingQMax: dampingQ(min.dampingIndex),
     settlingCyclesMax: settling.includes(null) ? null : Math.max(...(settling as number[])),
     rampShare: rampShare(law, required.gain, region, corners),
-    peakLimit_A: figure(unit, region, peakLimit_A),
-    outputLimit_A: figure(unit, region, outputLimit_A),
-    lineResponse_A_per_V: figure(unit, region, lineResponse_A_per_V),
+    peakLimit_A: figure(unit, nominalRegion, peakLimit_A),
+    outputLimit_A: figure(unit, nominalRegion, outputLimit_A),
+    lineResponse_A_per_V: figure(unit, nominalRegion, lineResponse_A_per_V),
   };
 }
 

@@ -19,6 +19,8 @@ export function converterPlan(design: SizedDesign): readonly PlannedConverter[] 
   return (['adaptive', 'fixed'] as const).flatMap((kind) => {
     const isFixed = design.chosen.law.kind === 'fixed';
     const sized = isFixed === (kind === 'fixed') ? design.chosen : design.alternative;
+    // Where the other law needs no ramp at all, there is none to show.
+    if (sized.realisedGain === 0) return [];
     const { track_V } = trackSource(design, kind, sized.realisedGain);
     const reach = design.demand.tracks === 'reference' ? referenceReach : 1;
     const fits = (inputVoltage_V: number) => track_V(inputVoltage_V) <= reach * design.demand.track_V.high;
