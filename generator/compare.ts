@@ -1,5 +1,4 @@
 import { failure, type Outcome, success } from './base/Problem.ts';
-import { exactly } from './base/Quantity.ts';
 import { comparisonDocument } from './emit/comparisonDocument.ts';
 import type { ComparisonDocument } from './emit/comparisonSchema.ts';
 import { hasInductance, loopCorners } from './law/loopCorners.ts';
@@ -13,6 +12,7 @@ import { verdict } from './loop/verdict.ts';
 import { nominalPeriod_s } from './ramp/demandOf.ts';
 import { buildRegion } from './region/buildRegion.ts';
 import { powerStageOf } from './region/powerStages.ts';
+import { withNominalDrops } from './region/stageDrops.ts';
 import type { ReadSpecification } from './spec/readSpecification.ts';
 
 /** Compares a fixed ramp with the adaptive laws: spec → region → law → loop. No circuit is chosen. */
@@ -24,7 +24,10 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
   const undetermined = undeterminedInductance(request, corners);
   if (undetermined.length > 0) return failure(undetermined);
   const period_s = nominalPeriod_s(specification);
-  const nominal = buildRegion(withNominalDrops(request), powerStageOf(specification));
+  const nominal = buildRegion(
+    { ...request, specification: withNominalDrops(specification) },
+    powerStageOf(specification),
+  );
   const nominalRegion = nominal.ok ? nominal.value : region.value;
   const laws = compareLaws(specification, region.value, nominalRegion, corners, period_s);
   return success({
@@ -37,23 +40,6 @@ export function compare(request: ReadSpecification): Outcome<Comparison> {
     neededRamp: neededRamp(region.value, specification.goal.dampingIndex),
     notes: comparisonNotes(specification, region.value, corners, laws),
   });
-}
-
-/** The same request with drops and losses as they are nominally. */
-function withNominalDrops(request: ReadSpecification): ReadSpecification {
-  const { losses, rectifierDrop_V } = request.specification;
-  return {
-    ...request,
-    specification: {
-      ...request.specification,
-      rectifierDrop_V: exactly(rectifierDrop_V.nominal),
-      losses: losses && {
-        switch_ohm: exactly(losses.switch_ohm.nominal),
-        winding_ohm: exactly(losses.winding_ohm.nominal),
-        rectifier_ohm: exactly(losses.rectifier_ohm.nominal),
-      },
-    },
-  };
 }
 
 /** The comparison as `compare --json` prints it. */

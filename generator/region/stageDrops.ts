@@ -1,4 +1,4 @@
-import type { Quantity } from '../base/Quantity.ts';
+import { exactly, type Quantity } from '../base/Quantity.ts';
 import type { Specification } from '../spec/Specification.ts';
 import type { StageDrops } from './PowerStage.ts';
 
@@ -31,4 +31,18 @@ export function dropsAt({ losses }: Specification, rectifierDrop_V: number, shar
 /** Whether any resistance has a tolerance: only then is there a way to go from low to high. */
 export function lossesVary({ losses }: Specification): boolean {
   return losses !== null && Object.values(losses).some(({ low, high }) => low !== high);
+}
+
+/** The same specification with drops and losses as they are nominally. */
+export function withNominalDrops(specification: Specification): Specification {
+  const { losses, rectifierDrop_V } = specification;
+  return {
+    ...specification,
+    rectifierDrop_V: exactly(rectifierDrop_V.nominal),
+    losses: losses && {
+      switch_ohm: exactly(losses.switch_ohm.nominal),
+      winding_ohm: exactly(losses.winding_ohm.nominal),
+      rectifier_ohm: exactly(losses.rectifier_ohm.nominal),
+    },
+  };
 }
