@@ -128,7 +128,6 @@ export const resultSchema = z.strictObject({
 
 export type Result = z.infer<typeof resultSchema>;
 export type ResultPart = z.infer<typeof part>;
-export type CircuitFigure = z.infer<typeof circuitFigure>;
 export type RuleOutcome = z.infer<typeof ruleOutcome>;
 export type DeckCheck = z.infer<typeof deckCheck>;
 export type Simulation = z.infer<typeof simulation>;

@@ -1,5 +1,5 @@
 import { limits } from '../circuit/boardOpamp/limits.ts';
-import { resetTimeNeeded_s } from '../circuit/boardOpamp/refusals.ts';
+import { resetTimeNeeded_s } from '../circuit/boardOpamp/resetTime.ts';
 import { bipolar, switchResistance_ohm } from '../circuit/DeviceModels.ts';
 import { currentSourceVoltages, rampFigures } from '../circuit/rampFigures.ts';
 import type { SizedDesign } from '../circuit/SizedDesign.ts';

@@ -147,7 +147,7 @@ const settled = (edges: readonly number[]) =>
 
 describe('the cycle engine against SPICE on the same step of the inductor current', () => {
   it.each(['converter-adaptive.cir', 'converter-adaptive-3.cir'])(
-    'shows edges and peaks of %s within two thousandths of the step, and settles in the same cycle',
+    'shows peaks of %s within a thousandth of the step, valleys within two, and settles in the same cycle',
     async (file) => {
       const deck = decks.converters.get(file)!;
       const fineRun = await simulate(file, deck, 8000);
@@ -160,8 +160,9 @@ describe('the cycle engine against SPICE on the same step of the inductor curren
       const far = (spice: readonly number[], exact: readonly number[]) =>
         Math.max(...spice.map((value, n) => Math.abs(value - exact[n]!))) / Math.abs(shift_A);
       expect(Math.abs(shift_A)).toBeGreaterThan(0.1);
-      // Two time steps of the finer run, of the thousand by which the step moves the trip.
-      expect(far(peaks, own.peaks)).toBeLessThan(2e-3);
+      expect(far(peaks, own.peaks)).toBeLessThan(1e-3);
+      // The valleys come out within 0.05 % and 0.14 %, whatever the time step: the deck's switches and ramp are
+      // not quite those of the engine.
       expect(far(edges, own.edges)).toBeLessThan(2e-3);
       expect(settled(own.edges)).toBe(settled(edges));
     },

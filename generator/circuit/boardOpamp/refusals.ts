@@ -9,8 +9,6 @@ import type { Headroom } from './headroom.ts';
 import { limits } from './limits.ts';
 import { resetTimeNeeded_s } from './resetTime.ts';
 
-export { resetTimeNeeded_s } from './resetTime.ts';
-
 interface Inequality {
   readonly key: string;
   /** In words, `left ≤ right`. */
